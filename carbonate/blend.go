@@ -23,8 +23,10 @@ func Blend(streams ...Stream) (Water, error) {
 		return Water{}, errors.New("carbonate: a blend has no flow")
 	}
 	var w Water
+	coldest, warmest := streams[0].Water.Kelvin, streams[0].Water.Kelvin
 	for _, s := range streams {
 		f := s.Flow / sum
+		coldest, warmest = min(coldest, s.Water.Kelvin), max(warmest, s.Water.Kelvin)
 		for i := range w.Totals {
 			w.Totals[i] += f * s.Water.Totals[i]
 		}
@@ -32,5 +34,7 @@ func Blend(streams ...Stream) (Water, error) {
 		w.Background += f * s.Water.Background
 		w.Kelvin += f * s.Water.Kelvin
 	}
+	// Rounding must not carry a mean outside what was mixed.
+	w.Kelvin = min(max(w.Kelvin, coldest), warmest)
 	return w, nil
 }

@@ -13,3 +13,16 @@ func (s *State) BufferIntensity() float64 {
 func (s *State) WaterBufferIntensity() float64 {
 	return math.Ln10 * (s.p.hyd + s.p.oh)
 }
+
+// CarbonateBufferShare is the share of BufferIntensity that inorganic carbon
+// brings, 0 to 1: what is lost when the carbon is taken out at the same pH,
+// with the other ions as they are.
+func (s *State) CarbonateBufferShare() float64 {
+	whole := s.BufferIntensity()
+	p := s.p
+	p.co3, p.hco3, p.co2 = 0, 0, 0
+	p.caHCO3, p.caCO3, p.mgHCO3, p.mgCO3 = 0, 0, 0, 0
+	p.t[Carbon] = 0
+	rest := math.Ln10 * (p.slopes(carbonGiven).protons + p.minorSlope)
+	return max(0, 1-rest/whole)
+}

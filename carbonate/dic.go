@@ -104,19 +104,3 @@ func (k *Constants) fromPH(s *State, h float64, w *Water, in IonicInput) (ionsWi
 	s.Water.Totals[Carbon] = carbon
 	return ionsWin, nil
 }
-
-// LeastAlkalinity is the alkalinity, eq/L, that a water of this pH has with no
-// inorganic carbon at all; a measured alkalinity below it contradicts the pH.
-func (k *Constants) LeastAlkalinity(pH float64, w Water) (float64, error) {
-	w.Totals[Carbon] = 0
-	if err := check(&w); err != nil {
-		return 0, err
-	}
-	var p point
-	p.start(k, &w.Totals, w.Background)
-	p.setH(math.Exp(-pH * math.Ln10))
-	if !p.converge(carbonGiven, 0) {
-		return 0, ErrNoConvergence
-	}
-	return p.alkalinity(), nil
-}
