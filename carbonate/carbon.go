@@ -54,6 +54,30 @@ func (k *Constants) AlkalinityAt(pH float64, w Water) (float64, error) {
 	return p.alkalinity(), nil
 }
 
+// CarbonAt is the inorganic carbon, mol/L, with which a water of this
+// alkalinity and background has a pH: what is left after carbon dioxide was
+// stripped or taken up to that pH. ErrAlkalinityBelowPH where there is none.
+func (k *Constants) CarbonAt(pH float64, w Water) (float64, error) {
+	w.Totals[Carbon] = 0
+	if err := check(&w); err != nil {
+		return 0, err
+	}
+	var p point
+	p.start(k, &w.Totals, w.Background)
+	p.setH(math.Exp(-pH * math.Ln10))
+	converged := p.converge(alkalinityGiven, w.Alkalinity)
+	if err := p.checkIonic(); err != nil {
+		return 0, err
+	}
+	if p.forCarbon < 0 {
+		return 0, ErrAlkalinityBelowPH
+	}
+	if !converged {
+		return 0, ErrNoConvergence
+	}
+	return p.carbon(), nil
+}
+
 // LeastAlkalinity is the alkalinity, eq/L, that a water of this pH has with no
 // inorganic carbon at all; a measured alkalinity below it contradicts the pH.
 func (k *Constants) LeastAlkalinity(pH float64, w Water) (float64, error) {
