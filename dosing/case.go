@@ -5,6 +5,7 @@ package dosing
 // amounts in mol/L.
 type Case struct {
 	Readings  Readings
+	Sources   []Source // two or more waters blended into the raw water; Readings then gives the flow only
 	Additions []Addition
 	Target    Target
 	TargetAt  int       // the station (1 for the first addition) whose water must meet the target; 0 for the finished water
@@ -39,6 +40,13 @@ type Readings struct {
 	DIC             Optional // mol/L of C
 	Conductivity    Optional // S/m at 25 C
 	TDS             Optional // kg/m3
+}
+
+// Source is one water of a blend and its part of the flow.
+type Source struct {
+	Name     string
+	Readings Readings
+	Flow     Optional // m3/s, or parts of the whole in any one unit; all sources alike
 }
 
 // Addition is one step of the water's path: a chemical feed, or a process that

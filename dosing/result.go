@@ -9,6 +9,7 @@ import (
 // computes none of its own.
 type Result struct {
 	Case     Case
+	Sources  []Figures // of a blend, each water before it is mixed, in the order of the case
 	Stations []Station // the raw water, then one an addition, in order
 	Solved   int       // index into Stations of the addition solved for, 0 if none
 	Warnings []Warning // sorted by code, then field

@@ -33,11 +33,10 @@ type run struct {
 }
 
 func (r *run) solve() *Problem {
-	base, kn, warnings, err := raw(&r.c.Readings)
-	if err != nil {
+	if err := r.start(); err != nil {
 		return problem(err)
 	}
-	r.base, r.known, r.warnings = base, kn, warnings
+	base := r.base
 	r.k = base.Constants()
 	if p := r.plan(); p != nil {
 		return p

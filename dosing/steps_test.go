@@ -136,3 +136,56 @@ func TestTargetBetween(t *testing.T) {
 	}
 	near(t, "finished pH", res.Finished().Figures.PH, 6.8, 1e-6)
 }
+
+// wells are a hard well and a softened water; the figures of their blends are an
+// independent working of the same equations.
+func wells() (well, softened dosing.Readings) {
+	well = dosing.Readings{
+		PH: dosing.Some(7.15), Alkalinity: dosing.Some(caco3(285)), Kelvin: dosing.Some(284.65),
+		Calcium: mgL(carbonate.Calcium, 106), Magnesium: mgL(carbonate.Magnesium, 14), Sodium: mgL(carbonate.Sodium, 10.5),
+		Chloride: mgL(carbonate.Chloride, 22), Sulfate: mgL(carbonate.Sulfate, 28), Conductivity: dosing.Some(640e-4),
+	}
+	softened = well
+	softened.PH, softened.Alkalinity = dosing.Some(9.95), dosing.Some(caco3(62))
+	softened.Calcium, softened.Magnesium = mgL(carbonate.Calcium, 34), mgL(carbonate.Magnesium, 4)
+	softened.Conductivity = dosing.Some(250e-4)
+	return well, softened
+}
+
+func TestBlendOfSources(t *testing.T) {
+	well, softened := wells()
+	for _, c := range []struct{ share, pH, si, ccpp float64 }{
+		{0.4, 7.61, 0.02, 0.6}, {0.1, 9.38, 1.22, 23}, {0.2, 8.79, 0.905, 13.4},
+	} {
+		r, err := dosing.Solve(dosing.Case{Sources: []dosing.Source{
+			{Name: "well", Readings: well, Flow: dosing.Some(c.share)},
+			{Name: "softened", Readings: softened, Flow: dosing.Some(1 - c.share)},
+		}})
+		if err != nil {
+			t.Fatal(err)
+		}
+		f := r.Raw().Figures
+		near(t, "pH of the blend", f.PH, c.pH, 0.005)
+		near(t, "SI of the blend", f.SaturationIndex.Value, c.si, 0.005)
+		near(t, "CCPP of the blend", f.CCPP.Value*1e3*carbonate.MolarMassCaCO3, c.ccpp, 0.1)
+		mean := c.share*7.15 + (1-c.share)*9.95
+		if d := mean - f.PH; d < 0.2 {
+			t.Errorf("the mean pH %g is hardly wrong here", mean)
+		}
+		if len(r.Sources) != 2 || r.Sources[0].PH != 7.15 {
+			t.Errorf("sources: %d", len(r.Sources))
+		}
+		share, err := dosing.ShareToMeet(dosing.Case{Sources: r.Case.Sources, Target: dosing.Target{Kind: dosing.TargetPH, Value: f.PH}})
+		if err != nil {
+			t.Fatal(err)
+		}
+		near(t, "share that meets that pH", share, c.share, 1e-6)
+	}
+	_, err := dosing.ShareToMeet(dosing.Case{Sources: []dosing.Source{{Name: "a", Readings: well}, {Name: "b", Readings: softened}},
+		Target: dosing.Target{Kind: dosing.TargetPH, Value: 10.5}})
+	var p *dosing.Problem
+	if !errors.As(err, &p) || p.Code != "out_of_reach" {
+		t.Fatal(err)
+	}
+	near(t, "nearest", p.Nearest.Value, 9.95, 1e-9)
+}
