@@ -1,0 +1,5 @@
+package report
+
+import "flag"
+
+var update = flag.Bool("update", false, "write the golden files anew")
