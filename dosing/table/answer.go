@@ -1,0 +1,139 @@
+package table
+
+import (
+	"fmt"
+	"maps"
+	"strings"
+
+	"beckline/dosing"
+	"beckline/dosing/entry"
+	"beckline/dosing/reading"
+	"beckline/dosing/report"
+)
+
+// answer works one row out. The cells are those of report.Columns.
+func (h *header) answer(r *row, o Options) (cells []string, unusual bool, p *dosing.Problem) {
+	if p := h.unusable(r); p != nil {
+		return nil, false, p
+	}
+	form, p := h.form(r, o)
+	if p != nil {
+		return nil, false, p
+	}
+	c, err := form.Case(o.Need)
+	if err != nil {
+		return nil, false, asProblem(err)
+	}
+	result, err := dosing.Solve(c)
+	if err != nil {
+		return nil, false, asProblem(err)
+	}
+	document := report.New(result)
+	if !document.Agrees() {
+		return nil, false, &dosing.Problem{Kind: dosing.Failed, Code: "checks_disagree",
+			Accepted: "nothing: the answer did not pass its own checks"}
+	}
+	for _, w := range document.Warnings {
+		unusual = unusual || strings.HasPrefix(w.Code, "unusual_")
+	}
+	return document.Cells(), unusual, nil
+}
+
+// unusable says why a row cannot be read at all.
+func (h *header) unusable(r *row) *dosing.Problem {
+	switch {
+	case r.fault == overLong:
+		return rowProblem("cell_too_long", h.column(r.at), "", fmt.Sprintf("at most %d bytes in a cell", MaxCell))
+	case r.fault == unclosedQuote:
+		return rowProblem("unclosed_quote", h.column(r.at), "", "a quote at the end of a quoted cell")
+	case len(r.cells) < len(h.names):
+		return rowProblem("ragged_row", "row", cellCount(len(r.cells)),
+			cellCount(len(h.names))+", as in the first row")
+	case len(r.cells) > len(h.names):
+		surplus := strings.Join(r.cells[len(h.names):], string(h.comma))
+		return rowProblem("ragged_row", "row", cellCount(len(r.cells)),
+			cellCount(len(h.names))+", as in the first row; left out at the end: "+reading.Clean(surplus))
+	}
+	return nil
+}
+
+func cellCount(n int) string {
+	if n == 1 {
+		return "1 cell"
+	}
+	return fmt.Sprintf("%d cells", n)
+}
+
+// form puts the row's cells and the flags together. An empty cell is not
+// measured.
+func (h *header) form(r *row, o Options) (entry.Form, *dosing.Problem) {
+	form := entry.Form{Values: maps.Clone(o.Form.Values), Product: o.Form.Product, Adds: o.Form.Adds}
+	if form.Values == nil {
+		form.Values = map[string]string{}
+	}
+	for i, cell := range r.cells {
+		f := h.fields[i]
+		text := strings.TrimSpace(cell)
+		switch {
+		case i == h.product:
+			form.Product = text
+		case f.Name == "" || text == "":
+		default:
+			number := h.plain(text)
+			// The column's name gives the unit, so a unit in the cell could
+			// only contradict it.
+			if _, err := reading.Number(number); err != nil {
+				return form, unreadable(f, text, err)
+			}
+			form.Values[f.Name] = number
+		}
+	}
+	return form, nil
+}
+
+// plain turns the decimal comma of a semicolon-separated file into a point,
+// where that file leaves no doubt what the comma is.
+func (h *header) plain(text string) string {
+	if h.decimal == ',' && strings.Count(text, ",") == 1 && !strings.Contains(text, ".") {
+		return strings.Replace(text, ",", ".", 1)
+	}
+	return text
+}
+
+func unreadable(f reading.Field, text string, err error) *dosing.Problem {
+	p := rowProblem(reading.CodeNotANumber, f.Name, text, f.Accepted())
+	if e, ok := err.(*reading.Error); ok {
+		p.Code = e.Code
+	}
+	if _, err := f.Parse(text); err == nil {
+		p.Accepted = "a number alone: the column " + f.Key + " gives the unit"
+	}
+	return p
+}
+
+// column names the column at a place, or its number beyond the header.
+func (h *header) column(at int) string {
+	if at < len(h.names) && h.names[at] != "" {
+		return reading.Clean(h.names[at])
+	}
+	return fmt.Sprintf("column %d", at+1)
+}
+
+func rowProblem(code, field, given, accepted string) *dosing.Problem {
+	return &dosing.Problem{Kind: dosing.BadInput, Code: code, Field: field, Given: reading.Clean(given), Accepted: accepted}
+}
+
+// asProblem takes the *Problem that the rooms below promise.
+func asProblem(err error) *dosing.Problem {
+	if p, ok := err.(*dosing.Problem); ok {
+		return p
+	}
+	return &dosing.Problem{Kind: dosing.Failed, Code: "failed", Given: err.Error()}
+}
+
+func faultText(f fault) string {
+	if f == overLong {
+		return fmt.Sprintf("a cell of over %d bytes", MaxCell)
+	}
+	return "a quote that is never closed"
+}
