@@ -84,6 +84,7 @@ const (
 // FeedSetup is the equipment side of an addition.
 type FeedSetup struct {
 	ProductKelvin Optional // K, temperature of the product in its tank; default 293.15
+	Density       Optional // kg/m3 of the product as measured in its tank; default the published table's
 	PumpCapacity  Optional // m3/s at 100 %
 	MaximumUse    Optional // kg of product per m3 of water, the certified maximum use level
 }

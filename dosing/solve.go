@@ -213,6 +213,7 @@ func (r *run) feed(a *Addition, dose float64) (feed.Rates, error) {
 		Strength:      p.Strength,
 		Form:          p.Form,
 		Density:       p.Density,
+		KgPerM3:       a.Feed.Density.Or(0),
 		ProductKelvin: a.Feed.ProductKelvin.Or(0),
 		Flow:          r.c.Readings.Flow.Or(0),
 		PumpCapacity:  a.Feed.PumpCapacity.Or(0),

@@ -23,8 +23,11 @@ var (
 const near = 1e-12
 
 // additions reads the doses that are given, in their order.
-func (w *filling) additions() {
-	for _, text := range w.form.Adds {
+func (w *filling) additions(texts []string) {
+	for _, text := range texts {
+		if w.process(text) || w.chlorine(text) {
+			continue
+		}
 		d, err := reading.ParseDose(text)
 		if err != nil {
 			w.problems = append(w.problems, problemOf(err))

@@ -14,7 +14,11 @@ import (
 type Form struct {
 	Values  map[string]string // by reading.Field.Name, with or without a unit
 	Product string            // catalogue name of the product whose dose is asked for
-	Adds    []string          // PRODUCT=DOSE, in the order in which the water meets them
+	Adds    []string          // PRODUCT=DOSE or a process, ahead of the product, in the order in which the water meets them
+	Thens   []string          // the same, behind it
+
+	TargetAfter string   // name of the addition whose water must meet the target; "" for the finished water
+	Sources     []string // waters of a blend instead of one sample: "NAME; flow=...; ph=...; ..."
 }
 
 // Need says what the form is for, and so what it has to hold.
@@ -53,16 +57,22 @@ type filling struct {
 
 func (f Form) read(need Need) (dosing.Case, []*dosing.Problem) {
 	w := &filling{form: f, need: need}
-	w.readings()
+	if len(f.Sources) > 0 {
+		w.sources()
+	} else {
+		w.readings()
+	}
 	var solved *dosing.Addition
 	if need == NeedDose {
 		w.target()
 		solved = w.solved()
 	}
-	w.additions()
+	w.additions(f.Adds)
 	if solved != nil {
 		w.result.Additions = append(w.result.Additions, *solved)
 	}
+	w.additions(f.Thens)
+	w.targetAfter()
 	w.unknownFields()
 	return w.result, w.problems
 }

@@ -34,6 +34,9 @@ var reasons = map[string]string{
 	"no_flow":                  "a source has no flow",
 	"not_chlorine":             "is no form of chlorine, so it has no demand or residual",
 	"breakpoint_chlorination":  "brings more than 5 of chlorine to 1 of ammonia nitrogen by mass: breakpoint chemistry is not computed here",
+	"bad_step":                 "is not a step that can be read",
+	"bad_source":               "is not a source that can be read",
+	"unknown_step":             "names no addition of this line",
 	"target_before_dose":       "is asked for before the dose that is to reach it",
 	// no answer
 	"out_of_reach":     "cannot be reached with this product",
