@@ -8,6 +8,7 @@ type Case struct {
 	Sources   []Source // two or more waters blended into the raw water; Readings then gives the flow only
 	Additions []Addition
 	Target    Target
+	Second    Target    // with two solved additions, the other figure that they must reach together
 	TargetAt  int       // the station (1 for the first addition) whose water must meet the target; 0 for the finished water
 	Notes     []Warning // what reading the input already found (unusual values, assumed bases)
 }
@@ -99,6 +100,7 @@ const (
 	TargetAlkalinity      // eq/L
 	TargetSaturationIndex // calcite, dimensionless
 	TargetCCPP            // mol/L of CaCO3
+	TargetDIC             // mol/L of C, dissolved inorganic carbon
 )
 
 // Target is the figure that the solved addition must reach.

@@ -11,7 +11,7 @@ type Result struct {
 	Case     Case
 	Sources  []Figures // of a blend, each water before it is mixed, in the order of the case
 	Stations []Station // the raw water, then one an addition, in order
-	Solved   int       // index into Stations of the addition solved for, 0 if none
+	Solved   int       // index into Stations of the (first) addition solved for, 0 if none
 	Warnings []Warning // sorted by code, then field
 	Checks   []Check
 }
@@ -28,6 +28,18 @@ func (r *Result) Dose() *Station {
 		return nil
 	}
 	return &r.Stations[r.Solved]
+}
+
+// Doses are the stations of all solved additions, in order: one, or two where
+// two targets were asked for.
+func (r *Result) Doses() []*Station {
+	var out []*Station
+	for i := range r.Stations {
+		if r.Stations[i].Solved {
+			out = append(out, &r.Stations[i])
+		}
+	}
+	return out
 }
 
 // Station is the water after one step of its path, and the step.

@@ -25,6 +25,7 @@ type run struct {
 	known    known
 	base     carbonate.State // the raw water
 	solved   int             // index into Additions, -1 for none
+	second   int             // index of the other solved addition, -1 for none
 	targetAt int             // how many additions the target's water has passed
 	doses    []float64
 	states   []carbonate.State // after each addition
@@ -58,7 +59,7 @@ func (r *run) solve() *Problem {
 
 // plan checks the additions and finds the one to solve for.
 func (r *run) plan() *Problem {
-	r.solved = -1
+	r.solved, r.second = -1, -1
 	n := len(r.c.Additions)
 	r.doses = make([]float64, n)
 	for i := range r.c.Additions {
@@ -69,6 +70,9 @@ func (r *run) plan() *Problem {
 	if r.solved >= 0 && r.c.Target.Kind == NoTarget {
 		return &Problem{Kind: BadInput, Code: "missing", Field: "target-ph"}
 	}
+	if r.second >= 0 && r.c.Second.Kind == NoTarget || r.second < 0 && r.c.Second.Kind != NoTarget {
+		return &Problem{Kind: BadInput, Code: "two_and_two", Field: "product"}
+	}
 	if r.solved < 0 && r.c.Target.Kind != NoTarget {
 		return &Problem{Kind: BadInput, Code: "missing", Field: "product"}
 	}
@@ -76,7 +80,7 @@ func (r *run) plan() *Problem {
 	if r.targetAt == 0 {
 		r.targetAt = n
 	}
-	if r.targetAt < 0 || r.targetAt > n || r.solved >= r.targetAt {
+	if r.targetAt < 0 || r.targetAt > n || max(r.solved, r.second) >= r.targetAt {
 		return &Problem{Kind: BadInput, Code: "target_before_dose", Field: r.c.Target.Kind.Field()}
 	}
 	return nil
@@ -94,8 +98,11 @@ func (r *run) planOne(i int, a *Addition) *Problem {
 		return &Problem{Kind: BadInput, Code: "not_chlorine", Field: "add", Given: a.Product.Name}
 	}
 	switch {
+	case a.Solve && r.second >= 0:
+		return &Problem{Kind: BadInput, Code: "three_solved", Field: "product", Given: a.Product.Name}
 	case a.Solve && r.solved >= 0:
-		return &Problem{Kind: BadInput, Code: "two_solved", Field: "product", Given: a.Product.Name}
+		r.second = i
+		return nil
 	case a.Solve:
 		r.solved = i
 		return nil
@@ -117,6 +124,9 @@ func (r *run) planOne(i int, a *Addition) *Problem {
 func (r *run) dose() *Problem {
 	if r.solved < 0 {
 		return nil
+	}
+	if r.second >= 0 {
+		return r.pair()
 	}
 	s, p := r.search(r.c.Additions[r.solved].Product)
 	if p != nil {
@@ -192,7 +202,7 @@ func (r *run) stations() *Problem {
 	for i := range r.states {
 		a := &r.res.Case.Additions[i]
 		st := &r.res.Stations[i+1]
-		st.Addition, st.Dose, st.Solved = a, r.doses[i], i == r.solved
+		st.Addition, st.Dose, st.Solved = a, r.doses[i], i == r.solved || i == r.second
 		if st.Figures, err = figures(&r.states[i], r.known); err != nil {
 			return refusal(err, &r.c.Readings, r.k, r.states[i].Water)
 		}

@@ -260,7 +260,7 @@ func TestRefusals(t *testing.T) {
 			c.Additions[0].Feed.PumpCapacity = dosing.Some(1e-7)
 		},
 		"calcium_needed":     func(c *dosing.Case) { c.Readings.Calcium = dosing.None; c.Target.Kind = dosing.TargetCCPP },
-		"two_solved":         func(c *dosing.Case) { c.Additions = append(c.Additions, c.Additions[0]) },
+		"two_and_two":        func(c *dosing.Case) { c.Additions = append(c.Additions, c.Additions[0]) },
 		"dose_outside_range": func(c *dosing.Case) { c.Additions = append(c.Additions, fixed(t, "alum-dry", 600)) },
 	} {
 		c := dosing.Case{Readings: soft(), Additions: []dosing.Addition{{Product: product(t, "caustic-50"), Solve: true}},

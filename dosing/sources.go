@@ -154,6 +154,8 @@ func figureOf(f *Figures, kind TargetKind) (float64, bool) {
 		return f.SaturationIndex.Value, f.SaturationIndex.Given
 	case TargetCCPP:
 		return f.CCPP.Value, f.CCPP.Given
+	case TargetDIC:
+		return f.DIC, true
 	}
 	return 0, false
 }

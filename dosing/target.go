@@ -18,6 +18,8 @@ func (t Target) met(figure float64) bool {
 		scale = 0.5e3 * carbonate.MolarMassCaCO3
 	case TargetCCPP:
 		scale = 1e3 * carbonate.MolarMassCaCO3
+	case TargetDIC:
+		scale = 1e3 * carbonate.Carbon.MolarMass()
 	}
 	return math.Abs(figure-t.Value)*scale <= metWithin
 }
@@ -54,6 +56,8 @@ func (s *search) figure(st *carbonate.State) (v float64, ok bool) {
 		}
 		v, err := st.CCPP()
 		return v, err == nil
+	case TargetDIC:
+		return st.Water.Totals[carbonate.Carbon], true
 	}
 	return 0, false
 }
@@ -227,6 +231,8 @@ func (k TargetKind) Field() string {
 		return "target-si"
 	case TargetCCPP:
 		return "target-ccpp"
+	case TargetDIC:
+		return "target-dic"
 	}
 	return ""
 }

@@ -4,10 +4,11 @@ import (
 	"beckline/dosing"
 )
 
+// A dose or a feed that is not zero is never shown as zero, however small.
 var (
-	asDose    = rounding{decimals: 3, significant: 3}
-	asFeed    = rounding{decimals: 4, significant: 3}
-	asPercent = rounding{decimals: 1, significant: 3}
+	asDose    = rounding{decimals: 3, significant: 3, never0: true}
+	asFeed    = rounding{decimals: 4, significant: 3, never0: true}
+	asPercent = rounding{decimals: 1, significant: 3, never0: true}
 )
 
 // doseSpec describes one figure of an addition.

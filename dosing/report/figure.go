@@ -1,5 +1,7 @@
 package report
 
+import "strings"
+
 // Figure is one named figure of an answer.
 type Figure struct {
 	Key    string // JSON key; CSV column after raw_ or finished_ for a water
@@ -16,6 +18,7 @@ type rounding struct {
 	decimals    int // at most so many decimals
 	significant int // and so many significant digits; 0: decimals alone
 	signed      bool
+	never0      bool // a value that would be rounded to zero keeps one digit
 }
 
 // Full is the figure for programs: 15 significant digits, "" where there is none.
@@ -56,6 +59,9 @@ func (r rounding) write(v float64) string {
 		if short := Significant(v, r.significant); len(short) < len(s) {
 			s = short
 		}
+	}
+	if r.never0 && v != 0 && isZero(strings.TrimPrefix(s, "-")) {
+		s = Significant(v, 1)
 	}
 	if r.signed && v > 0 && s[0] != '-' && !isZero(s) {
 		s = "+" + s

@@ -61,7 +61,8 @@ func TestShownFigures(t *testing.T) {
 	}{
 		{asPH, 8.4, "8.40"}, {asIndex, -0.004, "0.00"}, {asIndex, 0.37, "+0.37"}, {asIndex, -1.957, "-1.96"},
 		{asMass, 285.3, "285"}, {asMass, 12.43, "12.4"}, {asMass, 0.04, "0.0"}, {asDose, 6.7903, "6.79"},
-		{asDose, 0.0123, "0.012"}, {asStrength, 0.0031722, "0.00317"}, {asCCPP, 0.04, "0.0"},
+		{asDose, 0.0123, "0.012"}, {asDose, 0.00004, "0.00004"}, {asDose, 0, "0"}, {asFeed, 2.44e-8, "0.00000002"},
+		{asPercent, 0.021, "0.02"}, {asPercent, 9.44, "9.4"}, {asStrength, 0.0031722, "0.00317"}, {asCCPP, 0.04, "0.0"},
 	} {
 		if got := c.r.write(c.v); got != c.want {
 			t.Errorf("%v is shown %s, want %s", c.v, got, c.want)

@@ -25,15 +25,18 @@ var reasons = map[string]string{
 	"calcium_above_hardness":   "is less than the calcium in it: swapped, or as Ca?",
 	"magnesium_above_hardness": "is less than the magnesium in it: swapped, or as Mg?",
 	"alkalinity_below_ph":      "is below what the pH alone implies: check the pH, the alkalinity and its unit",
-	"chlorine_with_ammonia":    "stands with the other of free chlorine and ammonia: they form chloramine at once, which is not computed here",
+	"chlorine_with_ammonia":    "and ammonia stand on one water: they form chloramine at once, which is not computed here",
 	"calcium_needed":           "is needed for this target",
 	"dose_outside_range":       "is a dose outside what is accepted",
 	"density_unknown":          "is a strength at which the product's density is not known",
-	"two_solved":               "is a second dose to be found: one at a time",
 	"two_sources_needed":       "two waters are needed for a blend to a target",
 	"no_flow":                  "a source has no flow",
 	"not_chlorine":             "is no form of chlorine, so it has no demand or residual",
 	"breakpoint_chlorination":  "brings more than 5 of chlorine to 1 of ammonia nitrogen by mass: breakpoint chemistry is not computed here",
+	"pair_out_of_reach":        "cannot be met together with the first target by these two products",
+	"same_target":              "is the same figure twice: two targets need two figures",
+	"two_and_two":              "needs as many targets as products that are solved for",
+	"three_solved":             "is a third product to solve for; at most two are",
 	"bad_step":                 "is not a step that can be read",
 	"bad_source":               "is not a source that can be read",
 	"unknown_step":             "names no addition of this line",
@@ -42,15 +45,16 @@ var reasons = map[string]string{
 	"out_of_reach":     "cannot be reached with this product",
 	"wrong_side":       "is on the other side: every dose of this product leads away from it",
 	"target_met":       "is met already, no dose is needed",
-	"no_such_figure":   "does not exist for this water",
-	"ionic_strength":   "ionic strength is above 0.5 mol/L, where the activity equation ends",
-	"ph_outside_scale": "pH leaves the scale of 0 to 14",
+	"no_such_figure":   "has no value in this water: it needs calcium and carbonate above 0",
+	"ionic_strength":   "is above 0.5 mol/L, where the activity equation ends",
+	"ph_outside_scale": "leaves the scale of 0 to 14",
 	"pump_too_small":   "is too small for this feed",
 	// the program
 	"solver_failed":             "the solver failed",
 	"checks_disagree":           "the answer did not pass its own checks and is not given",
 	"published_values_disagree": "does not agree with its published value: do not trust this copy",
-	"failed":                    "failed",
+	"failed":                    "the program failed",
+	"not_written":               "could not be written",
 	// the command line and files
 	"given_twice":     "is given twice",
 	"no_value":        "has no value after it",
@@ -86,14 +90,18 @@ func reasonCodes() []string {
 
 const unknownReason = "cannot be used" // what reading.Reason says of a code it does not know
 
-func reason(code string) string {
-	if r, ok := reasons[code]; ok {
+func reason(p *dosing.Problem) string {
+	// A product that leaves the alkalinity alone leads nowhere.
+	if p.Code == "wrong_side" && p.Target.Kind == dosing.TargetAlkalinity {
+		return "is on the other side: no dose of this product leads towards it"
+	}
+	if r, ok := reasons[p.Code]; ok {
 		return r
 	}
-	if r := reading.Reason(code); r != unknownReason {
+	if r := reading.Reason(p.Code); r != unknownReason {
 		return r
 	}
-	return strings.ReplaceAll(code, "_", " ")
+	return strings.ReplaceAll(p.Code, "_", " ")
 }
 
 // ProblemLine says a refusal in one line: the field, what was given, what is
@@ -101,9 +109,19 @@ func reason(code string) string {
 // could reach the target. It has no line break; all but the echo of what was
 // given is plain ASCII.
 func ProblemLine(p *dosing.Problem) string {
-	first := p.Field + " " + quoted(Given(p)) + " " + reason(p.Code)
-	if p.Code == "pump_too_small" {
+	first := p.Field + " " + quoted(Given(p)) + " " + reason(p)
+	switch p.Code {
+	case "pump_too_small":
 		first = "pump is too small: it would have to run at " + Given(p) + " of its output"
+	case "ionic_strength": // no reading of its own
+		first = "ionic strength " + quoted(Given(p)) + " " + reason(p)
+	case "ph_outside_scale":
+		first = "pH " + quoted(Given(p)) + " " + reason(p)
+	case "failed", "solver_failed", "not_written": // what was given is the machine's word
+		first = p.Field + " " + reason(p)
+		if given := Given(p); given != "" {
+			first += ": " + given
+		}
 	}
 	parts := []string{strings.Join(strings.Fields(first), " ")}
 	if accepted := Accepted(p); accepted != "" {
@@ -126,6 +144,8 @@ func Given(p *dosing.Problem) string {
 		return p.Given
 	case p.Code == "pump_too_small":
 		return Significant(p.Value.Value*100, 3) + " %"
+	case p.Code == "ionic_strength" && p.Value.Given:
+		return asStrength.write(p.Value.Value) + " mol/L"
 	case p.Value.Given:
 		return valueText(p.Field, p.Value.Value)
 	case p.Target.Kind != dosing.NoTarget && p.Field == p.Target.Kind.Field():
@@ -142,6 +162,10 @@ func Accepted(p *dosing.Problem) string {
 		return p.Accepted
 	case p.Code == "pump_too_small":
 		return "a larger pump, a stronger product or a nearer target"
+	case p.Code == "ionic_strength":
+		return "up to 0.5 mol/L; check conductivity, TDS, the ions and their units"
+	case p.Code == "chlorine_with_ammonia":
+		return "one of free-chlorine and ammonia"
 	case p.Low.Given && p.High.Given && p.Low.Value == p.High.Value:
 		return "about " + valueText(p.Field, p.Low.Value)
 	case p.Low.Given && p.High.Given:

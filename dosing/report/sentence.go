@@ -2,8 +2,10 @@ package report
 
 import (
 	"fmt"
+	"slices"
 	"sort"
 	"strings"
+	"unicode"
 
 	"beckline/dosing"
 	"beckline/dosing/reading"
@@ -15,8 +17,7 @@ import (
 var sentences = map[string]func(w dosing.Warning) string{
 	"calcium_needed": says("not given, so there is no saturation index and no CCPP; " +
 		"enter calcium or calcium hardness"),
-	"basis_assumed": says("the bare number was taken as the mass of the chemical's own formula; " +
-		"the trade states this dose on another basis, so write it out (1.2 mg/L Cl2, 0.7 mg/L F)"),
+	"basis_assumed": basisAssumed,
 	"purity_assumed": says("the product was taken as 100 % pure; " +
 		"enter its strength from the certificate"),
 	"density_at_20c": says("no published density at the product's temperature; " +
@@ -55,7 +56,7 @@ var sentences = map[string]func(w dosing.Warning) string{
 			"(about 5.5 to 8.5 for aluminium, above 5 for iron), so its effect is not as computed", Fixed(w.Value, 2))
 	},
 	"over_use_level": func(w dosing.Warning) string {
-		return fmt.Sprintf("%s mg/L is over the maximum use level of %s mg/L; see the product's certificate",
+		return fmt.Sprintf("%s mg/L is over %s mg/L; look up the product's certified maximum use level",
 			asDose.write(w.Value*milli), asDose.write(w.Limit*milli))
 	},
 	"low_buffer": func(w dosing.Warning) string {
@@ -85,35 +86,76 @@ func Sentence(w dosing.Warning) string {
 	if say, ok := sentences[w.Code]; ok {
 		return about(w) + say(w)
 	}
+	if w.Code == "unusual_dose" {
+		return unusualDose(w)
+	}
 	if field, ok := strings.CutPrefix(w.Code, "unusual_"); ok {
 		return unusual(strings.ReplaceAll(field, "_", "-"), w)
 	}
 	return about(w) + strings.ReplaceAll(w.Code, "_", " ")
 }
 
-// unusual says which end of the usual band was passed, in the field's own unit.
+// unusual says what is usual and what else may have been meant, as the field
+// does; where the text that was typed is not at hand, which end of the usual
+// band was passed.
 func unusual(name string, w dosing.Warning) string {
 	s := strings.TrimSpace(name+" "+w.Given) + " is unusual"
 	f, ok := reading.Lookup(name)
-	switch {
-	case ok && w.Value < w.Limit:
+	if !ok {
+		return s + "; check the value and its unit"
+	}
+	switch v, err := f.Parse(w.Given); {
+	case err == nil && v.Unusual:
+		s += ": " + ASCII(v.UnusualWhy)
+	case w.Value < w.Limit:
 		s += ": under " + fieldText(f, w.Limit)
-	case ok && w.Value > w.Limit:
+	case w.Value > w.Limit:
 		s += ": over " + fieldText(f, w.Limit)
-	case !ok && w.Value > w.Limit && w.Limit > 0: // a dose, kg/m3
-		s += ": over " + asDose.write(w.Limit*milli) + " mg/L"
 	}
 	return s + "; check the value and its unit"
 }
 
+// unusualDose is about a dose, typed or found, in kg/m3 of the chemical. What to
+// check is the dose where it was typed, and the readings where it was found.
+func unusualDose(w dosing.Warning) string {
+	of, check := "", "check the readings, the target and their units"
+	if p, ok := dosing.ProductByName(w.Field); ok {
+		of = " as " + p.Chemical.Formula
+	}
+	if w.Given != "" {
+		check = "check the dose and its basis"
+	}
+	return fmt.Sprintf("%s: a dose of %s mg/L%s is unusual: over %s mg/L; %s", w.Field,
+		asDose.write(w.Value*milli), of, asDose.write(w.Limit*milli), check)
+}
+
+// basisAssumed says what a bare dose was taken as and how to write either.
+func basisAssumed(w dosing.Warning) string {
+	p, _ := dosing.ProductByName(w.Field)
+	trade, ok := TradeBasis(p.Chemical)
+	if !ok {
+		return "the bare dose was taken as the mass of the chemical's own formula; write its basis out"
+	}
+	given := w.Given
+	if !strings.ContainsFunc(given, unicode.IsLetter) {
+		given += " mg/L"
+	}
+	return fmt.Sprintf("the bare dose was taken as %s; the trade states it as %s, so write out which: %s %s or %s %s",
+		p.Chemical.Formula, trade.Name, given, trade.Name, given, p.Chemical.Formula)
+}
+
 // fieldText is an SI value in the unit that a bare number of the field has.
 func fieldText(f reading.Field, si float64) string {
-	return strings.TrimSpace(f.Show(si) + " " + reading.ASCII(f.Bare))
+	return strings.TrimSpace(f.Show(si) + " " + ASCII(f.Bare))
 }
 
 func says(text string) func(dosing.Warning) string {
 	return func(dosing.Warning) string { return text }
 }
+
+// stationCodes are the warnings about a water: their field is the product that
+// made it so.
+var stationCodes = []string{"may_scale", "ph_outside_tested_range", "chlorine_constant_extrapolated"}
 
 // about names what a warning is about, where it is about one thing.
 func about(w dosing.Warning) string {
@@ -122,6 +164,8 @@ func about(w dosing.Warning) string {
 		return w.Field + " " + w.Given + ": "
 	case w.Field == "raw":
 		return "raw water: "
+	case w.Field != "" && slices.Contains(stationCodes, w.Code):
+		return "after " + w.Field + ": "
 	case w.Field != "":
 		return w.Field + ": "
 	}

@@ -140,12 +140,16 @@ func TestUnusualNamesTheEndOfTheBand(t *testing.T) {
 	kelvin := si(t, "temperature", 41).Value
 	w := dosing.Warning{Code: "unusual_temperature", Field: "temperature", Given: "41", Value: kelvin,
 		Limit: si(t, "temperature", 30).Value}
-	if got, want := Sentence(w), "temperature 41 is unusual: over 30.0 deg C; check the value and its unit"; got != want {
+	if got, want := Sentence(w), "temperature 41 is unusual: usually 1 to 30 C; 41 F would be 5.0 C; check the value and its unit"; got != want {
 		t.Errorf("%q, want %q", got, want)
 	}
 	w.Value, w.Limit = si(t, "temperature", 0.5).Value, si(t, "temperature", 1).Value
 	w.Given = "0.5"
-	if got, want := Sentence(w), "temperature 0.5 is unusual: under 1.0 deg C; check the value and its unit"; got != want {
+	if got, want := Sentence(w), "temperature 0.5 is unusual: usually 1 to 30 C; check the value and its unit"; got != want {
+		t.Errorf("%q, want %q", got, want)
+	}
+	w.Given = "" // nothing typed is at hand
+	if got, want := Sentence(w), "temperature is unusual: under 1.0 C; check the value and its unit"; got != want {
 		t.Errorf("%q, want %q", got, want)
 	}
 }
@@ -169,19 +173,31 @@ func TestProblemLines(t *testing.T) {
 			`ph "abc" is not a number; accepted: a number, 0 to 14`},
 		"range in the field's unit": {dosing.Problem{Code: "outside_range", Field: "temperature", Value: dosing.Some(353.15),
 			Low: dosing.Some(273.15), High: dosing.Some(323.15)},
-			`temperature "80.0 deg C" is outside what is accepted; accepted: 0.0 deg C to 50.0 deg C`},
+			`temperature "80.0 C" is outside what is accepted; accepted: 0.0 C to 50.0 C`},
 		"out of reach": {dosing.Problem{Kind: dosing.NoAnswer, Code: "out_of_reach", Field: "target-ph",
 			Target:  dosing.Target{Kind: dosing.TargetPH, Value: 9},
 			Nearest: dosing.Some(8.234), CouldReach: []string{"lime", "caustic-25"}},
 			`target-ph "9.00" cannot be reached with this product; nearest reachable: pH 8.23; could reach it: lime, caustic-25`},
 		"nearest in its unit": {dosing.Problem{Kind: dosing.NoAnswer, Code: "wrong_side", Field: "target-alkalinity",
 			Target: dosing.Target{Kind: dosing.TargetAlkalinity, Value: 1e-3}, Nearest: dosing.Some(2e-3)},
-			`target-alkalinity "50.0 mg/L as CaCO3" is on the other side: every dose of this product leads away from it; ` +
+			`target-alkalinity "50.0 mg/L as CaCO3" is on the other side: no dose of this product leads towards it; ` +
 				`nearest reachable: alkalinity 100 mg/L as CaCO3`},
 		"pump": {dosing.Problem{Kind: dosing.NoAnswer, Code: "pump_too_small", Field: "pump", Value: dosing.Some(2.5),
 			Target: dosing.Target{Kind: dosing.TargetPH, Value: 9}, Nearest: dosing.Some(8)},
 			`pump is too small: it would have to run at 250 % of its output; ` +
 				`accepted: a larger pump, a stronger product or a nearer target; nearest reachable: pH 8.00`},
+		"no field of its own": {dosing.Problem{Kind: dosing.NoAnswer, Code: "ionic_strength", Value: dosing.Some(1.2), High: dosing.Some(0.5)},
+			`ionic strength "1.20 mol/L" is above 0.5 mol/L, where the activity equation ends; ` +
+				`accepted: up to 0.5 mol/L; check conductivity, TDS, the ions and their units`},
+		"pH leaves the scale": {dosing.Problem{Kind: dosing.NoAnswer, Code: "ph_outside_scale", Value: dosing.Some(14.2),
+			Low: dosing.Some(0), High: dosing.Some(14)}, `pH "14.2" leaves the scale of 0 to 14; accepted: 0 to 14.0`},
+		"two that do not go together": {dosing.Problem{Code: "chlorine_with_ammonia", Field: "free-chlorine"},
+			`free-chlorine and ammonia stand on one water: they form chloramine at once, which is not computed here; ` +
+				`accepted: one of free-chlorine and ammonia`},
+		"the program": {dosing.Problem{Kind: dosing.Failed, Code: "solver_failed", Given: "no convergence"},
+			`the solver failed: no convergence`},
+		"the machine": {dosing.Problem{Kind: dosing.Failed, Code: "not_written", Field: "output", Given: "no space left on device"},
+			`output could not be written: no space left on device`},
 	} {
 		if got := ProblemLine(&c.p); got != c.want {
 			t.Errorf("%s:\n%s\nwant\n%s", name, got, c.want)
@@ -213,6 +229,34 @@ func TestProblemJSON(t *testing.T) {
 	if text := string(ProblemJSON(&dosing.Problem{Code: "missing", Field: "ph"})); !strings.Contains(text, `"nearest":null`) ||
 		!strings.Contains(text, `"could_reach":[]`) {
 		t.Errorf("%s", text)
+	}
+}
+
+// A warning names the product, the figure and its basis, and what to check.
+func TestSentencesSayWhatToDo(t *testing.T) {
+	for _, c := range []struct {
+		w    dosing.Warning
+		want string
+	}{
+		{dosing.Warning{Code: "unusual_dose", Field: "soda-ash", Value: 0.7126, Limit: 0.1},
+			"soda-ash: a dose of 713 mg/L as Na2CO3 is unusual: over 100 mg/L; check the readings, the target and their units"},
+		{dosing.Warning{Code: "unusual_dose", Field: "alum-dry", Given: "alum-dry=150", Value: 0.15, Limit: 0.1},
+			"alum-dry: a dose of 150 mg/L as Al2(SO4)3.14.3H2O is unusual: over 100 mg/L; check the dose and its basis"},
+		{dosing.Warning{Code: "basis_assumed", Field: "hypochlorite-12", Given: "1.2"},
+			"hypochlorite-12 1.2: the bare dose was taken as NaOCl; the trade states it as Cl2, so write out which: 1.2 mg/L Cl2 or 1.2 mg/L NaOCl"},
+		{dosing.Warning{Code: "basis_assumed", Field: "hydrofluorosilicic-23", Given: "0.7 ppm"},
+			"hydrofluorosilicic-23 0.7 ppm: the bare dose was taken as H2SiF6; the trade states it as F, so write out which: 0.7 ppm F or 0.7 ppm H2SiF6"},
+		// 100 mg/L may be no certified level at all, only where to look one up.
+		{dosing.Warning{Code: "over_use_level", Field: "caustic-25", Value: 5, Limit: 0.1},
+			"caustic-25: 5000 mg/L is over 100 mg/L; look up the product's certified maximum use level"},
+		{dosing.Warning{Code: "may_scale", Field: "caustic-25"},
+			"after caustic-25: calcium carbonate may precipitate, pH then lower than shown"},
+		{dosing.Warning{Code: "may_scale", Field: "raw"},
+			"raw water: calcium carbonate may precipitate, pH then lower than shown"},
+	} {
+		if got := Sentence(c.w); got != c.want {
+			t.Errorf("%s: %q, want %q", c.w.Code, got, c.want)
+		}
 	}
 }
 

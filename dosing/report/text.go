@@ -17,7 +17,7 @@ const textWidth = 78
 func (d Document) Text() string {
 	var b strings.Builder
 	if s := d.result.Dose(); s != nil {
-		b.WriteString(answer(s))
+		b.WriteString(answer(s, d.result.Case.Readings.Flow))
 		b.WriteString(doseLines(s, d.result.Case.Target))
 		b.WriteByte('\n')
 	}
@@ -29,33 +29,36 @@ func (d Document) Text() string {
 	return ASCII(b.String())
 }
 
-// answer is what to set, in the first line.
-func answer(s *dosing.Station) string {
+// answer is what to set, in the first line, then the same in other units.
+func answer(s *dosing.Station, flow dosing.Optional) string {
 	figures := Dose(s)
 	name := s.Addition.Product.Name
-	var lines []string
+	var first string
+	volumes := []string{find(figures, "feed_l_h").ShowUnit(), find(figures, "feed_ml_min").ShowUnit(),
+		find(figures, "feed_gal_h").ShowUnit(), perDayGallons(figures)}
+	masses := []string{perHour(figures), find(figures, "feed_kg_d").ShowUnit(), find(figures, "feed_lb_d").ShowUnit()}
 	switch {
 	case s.Feed.HasPump:
-		lines = append(lines, fmt.Sprintf("Set the pump to %s of its %s",
-			find(figures, "pump_percent").ShowUnit(), pumpCapacity(s)))
+		first = fmt.Sprintf("Set the pump to %s of its %s", find(figures, "pump_percent").ShowUnit(), pumpCapacity(s))
 	case s.Feed.HasFlow && s.Feed.HasVolume:
-		lines = append(lines, "Feed "+find(figures, "feed_l_h").ShowUnit()+" of "+name+
-			"; with --pump the setting follows")
+		first = "Feed " + volumes[0] + " of " + name + "; with --pump the setting follows"
+		volumes = volumes[1:]
 	case s.Feed.HasFlow:
-		lines = append(lines, "Feed "+perHour(figures)+" of "+name)
+		first = "Feed " + masses[0] + " of " + name
+		masses = masses[1:]
+		if s.Addition.Feed.PumpCapacity.Given {
+			first += "; a pump in L/h does not feed a " + formText(s.Addition.Product.Form)
+		}
 	default:
-		lines = append(lines, "Feed "+find(figures, "product_mg_l").ShowUnit()+" of "+name+
-			"; with --flow the feed rates follow")
+		first = "Feed " + find(figures, "product_mg_l").ShowUnit() + " of " + name + "; with --flow the feed rates follow"
 	}
+	lines := []string{first}
 	if s.Feed.HasFlow && s.Feed.HasVolume {
-		lines = append(lines, "  = "+strings.Join([]string{
-			find(figures, "feed_l_h").ShowUnit(), find(figures, "feed_ml_min").ShowUnit(),
-			find(figures, "feed_gal_h").ShowUnit(), perDayGallons(figures)}, " = "))
+		lines = append(lines, "  = "+strings.Join(volumes, " = "))
 	}
 	if s.Feed.HasFlow {
-		lines = append(lines, "  = "+strings.Join([]string{
-			perHour(figures), find(figures, "feed_kg_d").ShowUnit(), find(figures, "feed_lb_d").ShowUnit(),
-		}, " = ")+" of product as delivered")
+		lines = append(lines, "  = "+strings.Join(masses, " = ")+" of product as delivered",
+			"  into "+flowText(flow)+" of water")
 	}
 	return strings.Join(lines, "\n") + "\n"
 }
@@ -71,7 +74,9 @@ func doseLines(s *dosing.Station, t dosing.Target) string {
 	}
 	fmt.Fprintf(&b, "\n  product: %s, %s", p.Title, p.StrengthText)
 	if s.Feed.HasVolume && s.Feed.Density > 0 {
-		fmt.Fprintf(&b, ", %.0f kg/m3", s.Feed.Density)
+		// Both, since grams in a litre are easily taken for per cent by weight.
+		fmt.Fprintf(&b, ", %.0f kg/m3 (%s g/L of %s)", s.Feed.Density,
+			Significant(p.Strength*s.Feed.Density, 3), p.Chemical.Formula)
 	}
 	b.WriteByte('\n')
 	if pure := find(figures, "pure_kg_d"); pure.Value.Given {

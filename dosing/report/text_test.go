@@ -56,6 +56,44 @@ func TestTextOrder(t *testing.T) {
 	}
 }
 
+// The first line says what to set, and no line says it again; the flow that it
+// is for is shown in two units, since a slip of unit there is a slip of dose.
+func TestAnswerLines(t *testing.T) {
+	bare := dosing.Readings{PH: si(t, "ph", 7), Alkalinity: si(t, "alkalinity", 30), Kelvin: si(t, "temperature", 10)}
+	flowing := bare
+	flowing.Flow = si(t, "flow", 100)
+	for name, c := range map[string]struct {
+		d    Document
+		want []string // how the lines before the dose start
+	}{
+		"pump": {solved(t, flowing, "caustic-25", si(t, "pump", 20)),
+			[]string{"Set the pump to 10.6 % of its 20.0 L/h", "  = 2.11 L/h = ", "  = 2.69 kg/h = ", "  into 100.0 m3/h = 0.634 US MGD of water"}},
+		"no pump": {solved(t, flowing, "caustic-25", dosing.None),
+			[]string{"Feed 2.11 L/h of caustic-25; with --pump", "  = 35.2 mL/min = ", "  = 2.69 kg/h = ", "  into 100.0 m3/h = "}},
+		"a solid": {solved(t, flowing, "lime", dosing.None),
+			[]string{"Feed 0.626 kg/h of lime", "  = 15.0 kg/d = ", "  into 100.0 m3/h = "}},
+		"a solid and a pump": {solved(t, flowing, "lime", si(t, "pump", 20)),
+			[]string{"Feed 0.626 kg/h of lime; a pump in L/h does not feed a solid", "  = 15.0 kg/d = ", "  into 100.0 m3/h = "}},
+		"no flow": {solved(t, bare, "caustic-25", dosing.None),
+			[]string{"Feed 26.9 mg/L of caustic-25; with --flow"}},
+	} {
+		answer, _, _ := strings.Cut(c.d.Text(), "\n\n")
+		lines := strings.Split(answer, "\n")
+		if len(lines) != len(c.want) {
+			t.Errorf("%s: %d lines, want %d:\n%s", name, len(lines), len(c.want), answer)
+			continue
+		}
+		for i, want := range c.want {
+			if !strings.HasPrefix(lines[i], want) {
+				t.Errorf("%s: %q should start with %q", name, lines[i], want)
+			}
+		}
+	}
+	if text := solved(t, flowing, "caustic-25", dosing.None).Text(); !strings.Contains(text, "25 % by weight, 1274 kg/m3 (318 g/L of NaOH)") {
+		t.Errorf("no grams in a litre beside the strength:\n%s", text)
+	}
+}
+
 // Every output names what a dose is the mass of.
 func TestBasisIsAlwaysNamed(t *testing.T) {
 	for name, d := range everyDocument(t) {
