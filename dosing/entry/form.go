@@ -14,6 +14,7 @@ import (
 type Form struct {
 	Values  map[string]string // by reading.Field.Name, with or without a unit
 	Product string            // catalogue name of the product whose dose is asked for
+	Second  string            // another one, right behind it, where two targets are asked for; the settings are the first's
 	Adds    []string          // PRODUCT=DOSE or a process, ahead of the product, in the order in which the water meets them
 	Thens   []string          // the same, behind it
 
@@ -21,13 +22,17 @@ type Form struct {
 	Sources     []string // waters of a blend instead of one sample: "NAME; flow=...; ph=...; ..."
 }
 
+// fields are the readings, targets and settings; the copy is made once, since
+// every row of a table walks them.
+var fields = reading.Fields()
+
 // Need says what the form is for, and so what it has to hold.
 type Need int
 
 // The needs. Both take pH or DIC, alkalinity and temperature.
 const (
 	NeedWater Need = iota // the water itself, and after the Adds; target and product are not looked at
-	NeedDose              // also exactly one target and a product
+	NeedDose              // also a product and a target, or two of each
 )
 
 // Case reads the whole form. The error is a *dosing.Problem, the first of
@@ -70,6 +75,9 @@ func (f Form) read(need Need) (dosing.Case, []*dosing.Problem) {
 	w.additions(f.Adds)
 	if solved != nil {
 		w.result.Additions = append(w.result.Additions, *solved)
+	}
+	if need == NeedDose {
+		w.second()
 	}
 	w.additions(f.Thens)
 	w.targetAfter()
@@ -136,10 +144,10 @@ func (w *filling) unknownFields() {
 	slices.Sort(unknown)
 	for _, name := range unknown {
 		var names []string
-		for _, f := range reading.Fields() {
+		for _, f := range fields {
 			names = append(names, f.Name)
 		}
-		w.problem("unknown_field", reading.Clean(name), name, orList(nearest(name, names, 3)))
+		w.problem("unknown_field", reading.Clean(name), name, orList(Nearest(name, names, 3)))
 	}
 }
 

@@ -6,13 +6,15 @@ import (
 	"strings"
 
 	"beckline/dosing"
+	"beckline/dosing/reading"
 )
 
 // nearestProducts offers up to three names for an unknown one: products that
 // have it as their formula or at the start of a word of their name, title or
-// chemical, else those whose names differ by the fewest letters.
+// chemical, else those whose names differ by the fewest letters, the strength
+// at their end or not; none where that would be over half of the letters.
 func nearestProducts(name string) []string {
-	wanted := hyphened(name)
+	wanted := hyphened(reading.Clean(name))
 	var holds, names []string
 	for _, p := range dosing.Products() {
 		names = append(names, p.Name)
@@ -25,18 +27,58 @@ func nearestProducts(name string) []string {
 	if len(holds) > 0 {
 		return holds[:min(3, len(holds))]
 	}
-	return nearest(wanted, names, 3)
+	apart := func(name string) int {
+		stem := strings.TrimRight(strings.TrimRight(name, "0123456789"), "-")
+		return min(distance(wanted, name), distance(wanted, stem))
+	}
+	return likely(wanted, closest(names, 3, 0, apart), apart) // a slack would offer an acid beside a caustic
 }
 
-// nearest returns up to n names in the order of how few letters have to change
-// to make them of the wanted one; the first always, the others only if they are
-// within one letter of it.
-func nearest(wanted string, names []string, n int) []string {
+// Nearest returns up to n names for one that is not among them: those that
+// start with it, else those that need the fewest letters changed, at least one.
+func Nearest(wanted string, names []string, n int) []string {
+	wanted = strings.ToLower(reading.Clean(wanted))
+	var starts []string
+	for _, name := range names {
+		if name == wanted { // but for capitals
+			return []string{name}
+		}
+		if len(wanted) > 1 && strings.HasPrefix(name, wanted) {
+			starts = append(starts, name)
+		}
+	}
+	if len(starts) > 0 {
+		return starts[:min(n, len(starts))]
+	}
+	return closest(names, n, 1, func(name string) int { return distance(wanted, name) })
+}
+
+// Likely is Nearest without names that the wanted one cannot have been meant
+// for, so that it may be empty.
+func Likely(wanted string, names []string, n int) []string {
+	wanted = strings.ToLower(reading.Clean(wanted))
+	near := Nearest(wanted, names, n)
+	if len(wanted) > 1 && len(near) > 0 && strings.HasPrefix(near[0], wanted) {
+		return near
+	}
+	return likely(wanted, near, func(name string) int { return distance(wanted, name) })
+}
+
+// likely drops the names that over half of the wanted one's letters would have
+// to change for; one letter may always.
+func likely(wanted string, near []string, apart func(name string) int) []string {
+	most := max(1, len([]rune(wanted))/2)
+	return slices.DeleteFunc(near, func(name string) bool { return apart(name) > most })
+}
+
+// closest returns up to n names in the order of how far they are apart; the
+// first always, the others only if they are within slack letters of it.
+func closest(names []string, n, slack int, apart func(name string) int) []string {
 	sorted := slices.Clone(names)
-	slices.SortStableFunc(sorted, func(a, b string) int { return distance(wanted, a) - distance(wanted, b) })
+	slices.SortStableFunc(sorted, func(a, b string) int { return apart(a) - apart(b) })
 	var near []string
 	for _, name := range sorted {
-		if len(near) == n || len(near) > 0 && distance(wanted, name) > distance(wanted, near[0])+1 {
+		if len(near) == n || len(near) > 0 && apart(name) > apart(near[0])+slack {
 			break
 		}
 		near = append(near, name)

@@ -5,14 +5,8 @@ import (
 	"strings"
 
 	"beckline/dosing"
-	"beckline/dosing/feed"
 	"beckline/dosing/reading"
 )
-
-// strongestLiquidCaustic is the mass fraction of NaOH above which caustic soda
-// is not handled as a liquid (it sets well above room temperature). Common
-// practice, no source.
-const strongestLiquidCaustic = 0.55
 
 // ProductNamed finds a product of the catalogue. Capitals do not count, and a
 // space or an underscore stands for a hyphen. The error is a *dosing.Problem of
@@ -32,7 +26,11 @@ func productNamed(name string) (dosing.Product, *dosing.Problem) {
 	if p, ok := dosing.ProductByName(hyphened(name)); ok {
 		return p, nil
 	}
-	return dosing.Product{}, badInput("unknown_product", "product", name, orList(nearestProducts(name)))
+	near := orList(nearestProducts(name))
+	if near == "" {
+		near = "a product of the catalogue, such as caustic-25 or sulfuric-93"
+	}
+	return dosing.Product{}, badInput("unknown_product", "product", name, near)
 }
 
 var hyphens = strings.NewReplacer(" ", "-", "_", "-", "\u00a0", "-", "\u2010", "-", "\u2011", "-")
@@ -50,7 +48,7 @@ func (w *filling) solved() *dosing.Addition {
 		w.problems = append(w.problems, problem)
 	}
 	a := &dosing.Addition{Product: product, Solve: true}
-	for _, field := range reading.Fields() {
+	for _, field := range fields {
 		if field.Group != reading.Setting {
 			continue
 		}
@@ -78,10 +76,6 @@ func (w *filling) solved() *dosing.Addition {
 // strength sets another strength than the catalogue's.
 func (w *filling) strength(a *dosing.Addition, v reading.Value) {
 	p := a.Product
-	if p.Chemical.Formula == "NaOH" && p.Form == feed.Liquid && v.SI > strongestLiquidCaustic {
-		w.problem(reading.CodeTooHigh, "strength", v.Given, "above 0 to 55 % for liquid caustic soda")
-		return
-	}
 	trade := p.Stated == dosing.AsTradePercent
 	switch {
 	case trade && v.Unit == reading.PercentByWeight:

@@ -23,6 +23,9 @@ func TestProductNamed(t *testing.T) {
 func TestUnknownProductOffersTheNearest(t *testing.T) {
 	for name, want := range map[string]string{
 		"caustic-26":         "caustic-25",
+		"castic":             "caustic-25 or caustic-50",
+		"xyzzy":              "a product of the catalogue, such as caustic-25", // lime is as near as anything
+		"nosuch":             "a product of the catalogue, such as caustic-25",
 		"cuastic-25":         "caustic-25",
 		"caustic":            "caustic-25 or caustic-50",
 		"NaOH":               "caustic-25 or caustic-50",
@@ -85,8 +88,8 @@ func TestStrengthRefused(t *testing.T) {
 	for _, c := range []struct{ product, strength, code, accepted string }{
 		{"caustic-25", "0", "below_limit", "above 0 to 100 %"},
 		{"caustic-25", "120 %", "above_limit", "above 0 to 100 %"},
-		{"caustic-25", "55.1", "above_limit", "0 to 55 %"},
-		{"caustic-50", "100", "above_limit", "0 to 55 %"},
+		{"caustic-25", "53", "bad_strength", "up to 52 % by weight"},
+		{"caustic-50", "100", "bad_strength", "up to 52 % by weight"}, // the same limit, not a nearer one first
 		{"lime", "100.5", "above_limit", "above 0 to 100 %"},
 		{"lime", "-1", "below_limit", "above 0 to 100 %"},
 		{"caustic-25", "250 g/L", "ambiguous_unit", "% by weight"},
@@ -100,6 +103,29 @@ func TestStrengthRefused(t *testing.T) {
 		if p.Code != c.code || p.Field != "strength" || !strings.Contains(p.Accepted, c.accepted) || strings.Contains(p.Given, "\x00") {
 			t.Errorf("%s at %q: %+v, want %s and %q", c.product, c.strength, p, c.code, c.accepted)
 		}
+	}
+}
+
+func TestNearest(t *testing.T) {
+	names := []string{"ph", "ph-temperature", "alkalinity", "temperature", "hardness", "target-ph", "target-alkalinity", "target-si", "add"}
+	for wanted, want := range map[string]string{
+		"alk": "alkalinity", "temp": "temperature", "alkalinty": "alkalinity", "target": "target-ph target-alkalinity target-si",
+		"PH": "ph", "target_ph": "target-ph", "ad": "add", "hradness": "hardness",
+	} {
+		if got := strings.Join(Nearest(wanted, names, 3), " "); got != want {
+			t.Errorf("nearest to %q: %q, want %q", wanted, got, want)
+		}
+	}
+	if got := Nearest("xyzzy", names, 3); len(got) == 0 {
+		t.Error("nothing is nearest")
+	}
+	for wanted, want := range map[string]string{"xyzzy": "", "nosuch": "", "temp": "temperature", "alkalinty": "alkalinity", "PH": "ph"} {
+		if got := strings.Join(Likely(wanted, names, 3), " "); got != want {
+			t.Errorf("likely for %q: %q, want %q", wanted, got, want)
+		}
+	}
+	if got := Nearest("alk", nil, 3); len(got) != 0 {
+		t.Errorf("%v is nearest among none", got)
 	}
 }
 

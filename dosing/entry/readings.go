@@ -68,7 +68,7 @@ func slot(r *dosing.Readings, name string) *dosing.Optional {
 // readings fills in the sample and names what is missing. A temperature is
 // never assumed; a measured DIC stands in for the pH.
 func (w *filling) readings() {
-	for _, field := range reading.Fields() {
+	for _, field := range fields {
 		if field.Group != reading.Reading {
 			continue
 		}

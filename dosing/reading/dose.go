@@ -20,7 +20,8 @@ const MostDose = 10000.0
 // DoseField is the command-line name under which doses are given.
 const DoseField = "add"
 
-const doseForm = "PRODUCT=DOSE, such as alum-dry=22, or with its basis: hypochlorite-12=1.2 mg/L Cl2"
+// DoseForm is how a dose is written, for a person.
+const DoseForm = "PRODUCT=DOSE, such as alum-dry=22, or with its basis: hypochlorite-12=1.2 mg/L Cl2"
 
 // doseUnits convert to mg/L of the basis.
 var doseUnits = []unit{
@@ -42,7 +43,7 @@ func ParseDose(text string) (Dose, error) {
 	product, amount, found := strings.Cut(trim(text), "=")
 	product, amount = trim(product), trim(amount)
 	if !found || product == "" || amount == "" {
-		return Dose{}, &Error{Code: CodeDoseForm, Field: DoseField, Given: Clean(text), Accepted: doseForm}
+		return Dose{}, &Error{Code: CodeDoseForm, Field: DoseField, Given: Clean(text), Accepted: DoseForm}
 	}
 	d, err := parseAmount(amount, text)
 	if err != nil {
@@ -56,7 +57,7 @@ func doseError(err error) error {
 	e := *err.(*Error)
 	e.Field = DoseField
 	if e.Accepted == anyNumber {
-		e.Accepted = doseForm
+		e.Accepted = DoseForm
 	}
 	return &e
 }
@@ -64,7 +65,7 @@ func doseError(err error) error {
 // parseAmount reads what stands after the equals sign.
 func parseAmount(amount, text string) (Dose, error) {
 	number, rest := splitNumber(amount)
-	if number == "" || rest != "" && !startsUnit(rest) {
+	if !strings.ContainsFunc(number, isDigit) || rest != "" && !startsUnit(rest) {
 		return Dose{}, refuseNumber(amount, rest, text)
 	}
 	x, err := parseNumber(number, text)
@@ -76,7 +77,7 @@ func parseAmount(amount, text string) (Dose, error) {
 	}
 	i, basis, ok := unitAndBasis(rest)
 	if !ok {
-		return Dose{}, refuse(CodeUnknownUnit, text, doseForm)
+		return Dose{}, refuse(CodeUnknownUnit, text, DoseForm)
 	}
 	v := doseUnits[i].toSI(x)
 	const accepted = "0 to 10000 mg/L"

@@ -101,7 +101,7 @@ func (f Field) unit(s, number, rest, text string) (int, error) {
 	if rest == "" {
 		return 0, nil
 	}
-	if number == "" || !startsUnit(rest) {
+	if !strings.ContainsFunc(number, isDigit) || !startsUnit(rest) {
 		return 0, f.complete(refuseNumber(s, rest, text))
 	}
 	if i, ok := f.find.find(rest); ok {
@@ -134,9 +134,13 @@ func (f Field) complete(err error) error {
 	return &e
 }
 
+// AcceptedBare says what the field accepts where its unit is settled, as in a
+// column of a table: the range alone.
+func (f Field) AcceptedBare() string { return "a number, " + f.rangeText(0) }
+
 // Accepted says what the field accepts, for a person: the range and the units.
 func (f Field) Accepted() string {
-	text := "a number, " + f.rangeText(0)
+	text := f.AcceptedBare()
 	if more := f.Units()[1:]; len(more) > 0 {
 		text += ", or with " + list(more)
 	}

@@ -38,6 +38,7 @@ var refusedUnits = map[string][]unclear{
 	"hardness":            degreeUnclear,
 	"calcium-hardness":    degreeUnclear,
 	"dic":                 carbonUnclear,
+	"target-dic":          carbonUnclear,
 	"flow":                flowUnclear,
 	"pump":                pumpUnclear,
 	"strength":            strengthUnclear,

@@ -25,4 +25,10 @@ var targetFields = []Field{
 		units: precipitationUnits, decimals: 1,
 		limits: limits{low: -1000, high: 1000, usualLow: -5, usualHigh: 15},
 	},
+	{
+		Name: "target-dic", Key: "target_dic_mmol_l", Label: "target DIC", Group: Target, Step: 0.05,
+		Help:  "dissolved inorganic carbon wanted of the finished water",
+		units: carbonUnits, decimals: 3,
+		limits: limits{low: 0, high: 200, usualLow: 0.02, usualHigh: 12, meantHigh: "mg/L as C"},
+	},
 }

@@ -21,13 +21,15 @@ func asCaCO3(mole float64) []unit {
 		{name: "mg/L as CaCO3", also: []string{"mg/L", "MG/L", "MG/L CaCO3", "ppm", "ppm CaCO3", "g/m3", "g/m3 CaCO3"}, factor: perMille * mole / gCaCO3},
 		{name: "°dH", also: []string{"dH", "°d"}, factor: germanDegree * mole},
 		{name: "°fH", also: []string{"fH", "°f"}, factor: frenchDegree * mole},
-		{name: "°e", also: []string{"e", "°eH", "°Clark", "Clark"}, factor: englishDegree * mole},
+		{name: "°e", also: []string{"°eH", "°Clark", "Clark"}, factor: englishDegree * mole},
 		{name: "gpg", also: []string{"grains/gallon", "grains/gal", "gr/gal", "US gpg", "gpg US"}, factor: grainPerGallon * mole},
 	}
 }
 
-// A capital F after a degree sign is a temperature, not a French degree.
+// A capital F after a degree sign is a temperature, not a French degree; 3e may
+// be a number whose exponent is missing.
 var degreeUnclear = []unclear{
+	{[]string{"e"}, "°e (English degrees), or a whole exponent such as 3e1"},
 	{[]string{"°"}, "°dH, °fH or °e"},
 	{[]string{"°F"}, "°fH (French degrees)"},
 }

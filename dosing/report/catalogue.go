@@ -17,13 +17,24 @@ type Product struct {
 	Chemical      string `json:"chemical"`
 	Formula       string `json:"formula"`
 	Basis         string `json:"basis"`
-	TradeBasis    string `json:"trade_basis,omitempty"`
+	TradeBasis    words  `json:"trade_basis"` // null where the trade has none of its own
 	Strength      string `json:"strength"`
 	StrengthPart  Number `json:"strength_percent"` // of the formula, by weight
 	Form          string `json:"form"`
 	Density       Number `json:"density_kg_m3_20c"` // null for solids and gases
-	DensitySource string `json:"density_source"`
+	DensitySource words  `json:"density_source"`    // null as well
 	Purpose       string `json:"purpose"`
+}
+
+// words is a text that is null in JSON where there is none.
+type words string
+
+// MarshalJSON writes the text, or null.
+func (w words) MarshalJSON() ([]byte, error) {
+	if w == "" {
+		return []byte("null"), nil
+	}
+	return plainJSON(string(w)), nil
 }
 
 // Products describes products of the catalogue.
@@ -33,13 +44,13 @@ func Products(products []dosing.Product) []Product {
 		trade, _ := TradeBasis(p.Chemical)
 		list[i] = Product{
 			Name: p.Name, Title: p.Title, Chemical: p.Chemical.Name, Formula: p.Chemical.Formula,
-			Basis: Basis(p.Chemical), TradeBasis: trade.Name,
+			Basis: Basis(p.Chemical), TradeBasis: words(trade.Name),
 			Strength: p.StrengthText, StrengthPart: Some(p.Strength * 100),
 			Form: formText(p.Form), Purpose: purposeText(p.Purpose),
 		}
 		if p.Form == feed.Liquid {
 			if found, err := p.Density.At(p.Strength, referenceKelvin); err == nil {
-				list[i].Density, list[i].DensitySource = Some(found.KgPerM3), found.Source
+				list[i].Density, list[i].DensitySource = Some(found.KgPerM3), words(found.Source)
 			}
 		}
 	}
@@ -63,15 +74,16 @@ func ProductsText(products []dosing.Product) string {
 		}
 		density := p.Form
 		if p.Density.Given {
-			if number[p.DensitySource] == 0 {
-				sources = append(sources, p.DensitySource)
-				number[p.DensitySource] = len(sources)
+			source := string(p.DensitySource)
+			if number[source] == 0 {
+				sources = append(sources, source)
+				number[source] = len(sources)
 			}
-			density = fmt.Sprintf("%s kg/m3 [%d]", Fixed(p.Density.Value, 0), number[p.DensitySource])
+			density = fmt.Sprintf("%s kg/m3 [%d]", Fixed(p.Density.Value, 0), number[source])
 		}
 		basis := p.Basis
 		if p.TradeBasis != "" {
-			basis += ", or as " + p.TradeBasis
+			basis += ", or as " + string(p.TradeBasis)
 		}
 		fmt.Fprintf(&b, "  %-24s %-34s %s\n", p.Name, basis, density)
 		b.WriteString(Wrap(fmt.Sprintf("    %s; %s", p.Chemical, p.Strength), textWidth) + "\n")

@@ -23,6 +23,13 @@ func (d Document) JSON() ([]byte, error) {
 	} else {
 		o.add("dose", fields(d.Dose))
 	}
+	if solved := d.result.Doses(); len(solved) > 1 { // the first is the dose
+		doses := make([]object, len(solved))
+		for i, s := range solved {
+			doses[i] = fields(Dose(s))
+		}
+		o.add("doses", doses)
+	}
 	o.add("finished", fields(d.Finished))
 	stations := make([]object, len(d.Stations))
 	for i, s := range d.Stations {

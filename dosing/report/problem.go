@@ -34,6 +34,7 @@ var reasons = map[string]string{
 	"not_chlorine":             "is no form of chlorine, so it has no demand or residual",
 	"breakpoint_chlorination":  "brings more than 5 of chlorine to 1 of ammonia nitrogen by mass: breakpoint chemistry is not computed here",
 	"pair_out_of_reach":        "cannot be met together with the first target by these two products",
+	"same_product":             "is the same product twice: two doses need two products",
 	"same_target":              "is the same figure twice: two targets need two figures",
 	"two_and_two":              "needs as many targets as products that are solved for",
 	"three_solved":             "is a third product to solve for; at most two are",
@@ -62,6 +63,7 @@ var reasons = map[string]string{
 	"bad_flag":        "is not understood",
 	"unknown_flag":    "is not a flag of this command",
 	"unknown_command": "is not a command",
+	"not_with_water":  "is for a dose, and --water asks for none",
 	"stray_word":      "stands where nothing is expected",
 	"no_input":        "is missing",
 	"no_such_file":    "is not there",
@@ -70,6 +72,7 @@ var reasons = map[string]string{
 	"empty_file":      "is empty",
 	"no_header":       "has no header",
 	"nul_bytes":       "is not text",
+	"line_ends":       "has line ends that are not known here",
 	"column_missing":  "is a column that is missing",
 	"column_twice":    "is a column that stands twice",
 	"column_taken":    "is a column that the answer needs",
@@ -117,6 +120,8 @@ func ProblemLine(p *dosing.Problem) string {
 		first = "ionic strength " + quoted(Given(p)) + " " + reason(p)
 	case "ph_outside_scale":
 		first = "pH " + quoted(Given(p)) + " " + reason(p)
+	case "pair_out_of_reach":
+		return pairLine(p)
 	case "failed", "solver_failed", "not_written": // what was given is the machine's word
 		first = p.Field + " " + reason(p)
 		if given := Given(p); given != "" {
@@ -140,6 +145,8 @@ func ProblemLine(p *dosing.Problem) string {
 // in the field's own unit.
 func Given(p *dosing.Problem) string {
 	switch {
+	case p.Code == "pair_out_of_reach":
+		return pairGiven(p)
 	case p.Given != "":
 		return p.Given
 	case p.Code == "pump_too_small":
@@ -162,12 +169,16 @@ func Accepted(p *dosing.Problem) string {
 		return p.Accepted
 	case p.Code == "pump_too_small":
 		return "a larger pump, a stronger product or a nearer target"
+	case p.Code == "ionic_strength" && p.Nearest.Given: // the dose brings it
+		return "a nearer target"
 	case p.Code == "ionic_strength":
 		return "up to 0.5 mol/L; check conductivity, TDS, the ions and their units"
 	case p.Code == "chlorine_with_ammonia":
 		return "one of free-chlorine and ammonia"
 	case p.Low.Given && p.High.Given && p.Low.Value == p.High.Value:
 		return "about " + valueText(p.Field, p.Low.Value)
+	case p.Low.Given && p.High.Given && p.Value == p.Low: // the end itself is refused too
+		return "above " + valueText(p.Field, p.Low.Value) + " to " + valueText(p.Field, p.High.Value)
 	case p.Low.Given && p.High.Given:
 		return valueText(p.Field, p.Low.Value) + " to " + valueText(p.Field, p.High.Value)
 	case p.Low.Given:
@@ -208,6 +219,8 @@ func Nearest(p *dosing.Problem) Number {
 		return scaled(p.Nearest, caco3PerEquivalent)
 	case dosing.TargetCCPP:
 		return scaled(p.Nearest, caco3PerMole)
+	case dosing.TargetDIC:
+		return scaled(p.Nearest, milli)
 	}
 	return scaled(p.Nearest, 1)
 }

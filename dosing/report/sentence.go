@@ -48,6 +48,9 @@ var sentences = map[string]func(w dosing.Warning) string{
 	},
 	"may_scale": says("calcium carbonate may precipitate, pH then lower than shown"),
 	"low_alkalinity_for_coagulation": func(w dosing.Warning) string {
+		if w.Value <= 0 {
+			return "no alkalinity is left after the coagulant, only free acid; add alkalinity before it"
+		}
 		return fmt.Sprintf("only %s mg/L of alkalinity (as CaCO3) is left after the coagulant, under 5; add alkalinity before it",
 			asMass.write(w.Value*caco3PerEquivalent))
 	},

@@ -186,9 +186,15 @@ func TestProblemLines(t *testing.T) {
 			Target: dosing.Target{Kind: dosing.TargetPH, Value: 9}, Nearest: dosing.Some(8)},
 			`pump is too small: it would have to run at 250 % of its output; ` +
 				`accepted: a larger pump, a stronger product or a nearer target; nearest reachable: pH 8.00`},
+		"the end of a range itself": {dosing.Problem{Code: "outside_range", Field: "ph", Value: dosing.Some(4.5),
+			Low: dosing.Some(4.5), High: dosing.Some(14)},
+			`ph "4.50" is outside what is accepted; accepted: above 4.50 to 14.00`},
 		"no field of its own": {dosing.Problem{Kind: dosing.NoAnswer, Code: "ionic_strength", Value: dosing.Some(1.2), High: dosing.Some(0.5)},
 			`ionic strength "1.20 mol/L" is above 0.5 mol/L, where the activity equation ends; ` +
 				`accepted: up to 0.5 mol/L; check conductivity, TDS, the ions and their units`},
+		"a dose that is too much": {dosing.Problem{Kind: dosing.NoAnswer, Code: "ionic_strength", Value: dosing.Some(0.6), High: dosing.Some(0.5),
+			Target: dosing.Target{Kind: dosing.TargetPH, Value: 11}, Nearest: dosing.Some(10)},
+			`ionic strength "0.600 mol/L" is above 0.5 mol/L, where the activity equation ends; accepted: a nearer target; nearest reachable: pH 10.00`},
 		"pH leaves the scale": {dosing.Problem{Kind: dosing.NoAnswer, Code: "ph_outside_scale", Value: dosing.Some(14.2),
 			Low: dosing.Some(0), High: dosing.Some(14)}, `pH "14.2" leaves the scale of 0 to 14; accepted: 0 to 14.0`},
 		"two that do not go together": {dosing.Problem{Code: "chlorine_with_ammonia", Field: "free-chlorine"},
@@ -251,6 +257,10 @@ func TestSentencesSayWhatToDo(t *testing.T) {
 			"caustic-25: 5000 mg/L is over 100 mg/L; look up the product's certified maximum use level"},
 		{dosing.Warning{Code: "may_scale", Field: "caustic-25"},
 			"after caustic-25: calcium carbonate may precipitate, pH then lower than shown"},
+		{dosing.Warning{Code: "low_alkalinity_for_coagulation", Field: "alum-dry", Value: 5e-5, Limit: 1e-4},
+			"alum-dry: only 2.5 mg/L of alkalinity (as CaCO3) is left after the coagulant, under 5; add alkalinity before it"},
+		{dosing.Warning{Code: "low_alkalinity_for_coagulation", Field: "alum-dry", Value: -1e-4, Limit: 1e-4},
+			"alum-dry: no alkalinity is left after the coagulant, only free acid; add alkalinity before it"},
 		{dosing.Warning{Code: "may_scale", Field: "raw"},
 			"raw water: calcium carbonate may precipitate, pH then lower than shown"},
 	} {

@@ -26,7 +26,35 @@ func (d Document) Slip() string {
 	line := func(label, text string) {
 		b.WriteString(wrapLine(fmt.Sprintf("%-10s %s", label, text), slipWidth) + "\n")
 	}
-	s := d.result.Dose()
+	b.WriteString(strings.Repeat("-", slipWidth) + "\n")
+	doses := d.result.Doses()
+	if len(doses) == 0 {
+		doses = []*dosing.Station{nil}
+	}
+	for i, s := range doses {
+		if i > 0 {
+			line("and", "")
+		}
+		slipDose(line, s)
+	}
+	line("target", orDash(d.targetWords()))
+	line("flow", flowText(d.result.Case.Readings.Flow))
+	fmt.Fprintf(&b, "%-24s%10s%10s\n", "water", "finished", "raw")
+	for _, key := range slipWaters {
+		raw, finished := find(d.Raw, key), find(d.Finished, key)
+		fmt.Fprintf(&b, "%s\n", strings.TrimRight(fmt.Sprintf("  %-22s%10s%10s  %s",
+			raw.Label, finished.Show(), raw.Show(), raw.Unit), " "))
+	}
+	line("warnings", orNone(strings.ReplaceAll(d.WarningCodes(), ";", ", ")))
+	for _, c := range d.CautionLines() {
+		b.WriteString(wrapLine("! "+c, slipWidth) + "\n")
+	}
+	b.WriteString(strings.Repeat("-", slipWidth) + "\n")
+	return ASCII(b.String())
+}
+
+// slipDose is the part of the slip about one dose; nil is none.
+func slipDose(line func(label, text string), s *dosing.Station) {
 	pump, feed, mass, dose, product, pure := "-", "-", "-", "-", "-", "-"
 	if s != nil {
 		f := Dose(s)
@@ -43,27 +71,19 @@ func (d Document) Slip() string {
 		dose = doseText(f)
 		product = s.Addition.Product.Name + ", " + s.Addition.Product.StrengthText
 	}
-	b.WriteString(strings.Repeat("-", slipWidth) + "\n")
 	line("pump", pump)
 	line("feed", feed)
 	line("product", product)
 	line("by mass", mass)
 	line("pure", pure)
 	line("dose", dose)
-	line("target", TargetText(d.result.Case.Target))
-	line("flow", flowText(d.result.Case.Readings.Flow))
-	fmt.Fprintf(&b, "%-24s%10s%10s\n", "water", "finished", "raw")
-	for _, key := range slipWaters {
-		raw, finished := find(d.Raw, key), find(d.Finished, key)
-		fmt.Fprintf(&b, "%s\n", strings.TrimRight(fmt.Sprintf("  %-22s%10s%10s  %s",
-			raw.Label, finished.Show(), raw.Show(), raw.Unit), " "))
+}
+
+func orDash(s string) string {
+	if s == "" {
+		return "-"
 	}
-	line("warnings", orNone(strings.ReplaceAll(d.WarningCodes(), ";", ", ")))
-	for _, c := range d.CautionLines() {
-		b.WriteString(wrapLine("! "+c, slipWidth) + "\n")
-	}
-	b.WriteString(strings.Repeat("-", slipWidth) + "\n")
-	return ASCII(b.String())
+	return s
 }
 
 // LogLine returns one ASCII line of at most 78 columns for the shift log: date
@@ -90,6 +110,11 @@ func (d Document) LogLine(when time.Time) string {
 	}
 	parts := []string{start, s.Addition.Product.Name, find(f, "dose_mg_l").ShowUnit() + " pure", feed, pump,
 		"pH " + raw + " > " + finished}
+	for _, other := range d.result.Doses()[1:] { // with two doses one alone would mislead
+		parts[1] += " " + parts[2] + " +"
+		parts[1] += " " + other.Addition.Product.Name
+		parts[2] = find(Dose(other), "dose_mg_l").ShowUnit() + " pure"
+	}
 	for _, leaveOut := range []int{4, 3} {
 		if len(strings.Join(parts, " ")) <= logWidth {
 			break

@@ -16,9 +16,15 @@ const textWidth = 78
 // and the raw water, warnings, cautions, and how it was checked.
 func (d Document) Text() string {
 	var b strings.Builder
-	if s := d.result.Dose(); s != nil {
-		b.WriteString(answer(s, d.result.Case.Readings.Flow))
-		b.WriteString(doseLines(s, d.result.Case.Target))
+	doses := d.result.Doses()
+	for i, s := range doses {
+		if i > 0 {
+			b.WriteByte('\n')
+		}
+		b.WriteString(answer(s, d.result.Case.Readings.Flow, len(doses) > 1))
+		b.WriteString(doseLines(s, d.targetWords()))
+	}
+	if len(doses) > 0 {
 		b.WriteByte('\n')
 	}
 	d.writeAdditions(&b)
@@ -29,8 +35,21 @@ func (d Document) Text() string {
 	return ASCII(b.String())
 }
 
-// answer is what to set, in the first line, then the same in other units.
-func answer(s *dosing.Station, flow dosing.Optional) string {
+// targetWords is what the doses reach, "" where nothing was asked for.
+func (d Document) targetWords() string {
+	c := &d.result.Case
+	switch {
+	case c.Target.Kind == dosing.NoTarget:
+		return ""
+	case c.Second.Kind == dosing.NoTarget:
+		return TargetText(c.Target)
+	}
+	return TargetText(c.Target) + " and " + TargetText(c.Second)
+}
+
+// answer is what to set, in the first line, then the same in other units. Where
+// there are several pumps the first line says whose it is.
+func answer(s *dosing.Station, flow dosing.Optional, several bool) string {
 	figures := Dose(s)
 	name := s.Addition.Product.Name
 	var first string
@@ -39,7 +58,11 @@ func answer(s *dosing.Station, flow dosing.Optional) string {
 	masses := []string{perHour(figures), find(figures, "feed_kg_d").ShowUnit(), find(figures, "feed_lb_d").ShowUnit()}
 	switch {
 	case s.Feed.HasPump:
-		first = fmt.Sprintf("Set the pump to %s of its %s", find(figures, "pump_percent").ShowUnit(), pumpCapacity(s))
+		of := ""
+		if several {
+			of = " of " + name
+		}
+		first = fmt.Sprintf("Set the pump%s to %s of its %s", of, find(figures, "pump_percent").ShowUnit(), pumpCapacity(s))
 	case s.Feed.HasFlow && s.Feed.HasVolume:
 		first = "Feed " + volumes[0] + " of " + name + "; with --pump the setting follows"
 		volumes = volumes[1:]
@@ -64,13 +87,13 @@ func answer(s *dosing.Station, flow dosing.Optional) string {
 }
 
 // doseLines states the dose on every basis that belongs to it.
-func doseLines(s *dosing.Station, t dosing.Target) string {
+func doseLines(s *dosing.Station, target string) string {
 	var b strings.Builder
 	figures := Dose(s)
 	p := s.Addition.Product
 	fmt.Fprintf(&b, "\nDose %s", doseText(figures))
-	if t.Kind != dosing.NoTarget {
-		fmt.Fprintf(&b, " to reach %s", TargetText(t))
+	if target != "" {
+		fmt.Fprintf(&b, " to reach %s", target)
 	}
 	fmt.Fprintf(&b, "\n  product: %s, %s", p.Title, p.StrengthText)
 	if s.Feed.HasVolume && s.Feed.Density > 0 {
@@ -245,6 +268,8 @@ func TargetText(t dosing.Target) string {
 		return targetFigure(t.Kind, t.Value*caco3PerEquivalent)
 	case dosing.TargetCCPP:
 		return targetFigure(t.Kind, t.Value*caco3PerMole)
+	case dosing.TargetDIC:
+		return targetFigure(t.Kind, t.Value*milli)
 	}
 	return targetFigure(t.Kind, t.Value)
 }
@@ -260,6 +285,8 @@ func targetFigure(kind dosing.TargetKind, v float64) string {
 		return "saturation index " + asIndex.write(v)
 	case dosing.TargetCCPP:
 		return "CCPP " + asCCPP.write(v) + " mg/L as CaCO3"
+	case dosing.TargetDIC:
+		return "inorganic carbon " + asFine.write(v) + " mmol/L"
 	}
 	return "-"
 }

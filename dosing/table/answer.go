@@ -22,7 +22,7 @@ func (h *header) answer(r *row, o Options) (cells []string, unusual bool, p *dos
 	}
 	c, err := form.Case(o.Need)
 	if err != nil {
-		return nil, false, asProblem(err)
+		return nil, false, inColumn(asProblem(err))
 	}
 	result, err := dosing.Solve(c)
 	if err != nil {
@@ -46,6 +46,8 @@ func (h *header) unusable(r *row) *dosing.Problem {
 		return rowProblem("cell_too_long", h.column(r.at), "", fmt.Sprintf("at most %d bytes in a cell", MaxCell))
 	case r.fault == unclosedQuote:
 		return rowProblem("unclosed_quote", h.column(r.at), "", "a quote at the end of a quoted cell")
+	case r.blank() && len(h.names) > 1:
+		return rowProblem(reading.CodeEmpty, "row", "", cellCount(len(h.names))+", as in the first row")
 	case len(r.cells) < len(h.names):
 		return rowProblem("ragged_row", "row", cellCount(len(r.cells)),
 			cellCount(len(h.names))+", as in the first row")
@@ -101,12 +103,24 @@ func (h *header) plain(text string) string {
 }
 
 func unreadable(f reading.Field, text string, err error) *dosing.Problem {
-	p := rowProblem(reading.CodeNotANumber, f.Name, text, f.Accepted())
+	p := rowProblem(reading.CodeNotANumber, f.Name, text, f.AcceptedBare())
 	if e, ok := err.(*reading.Error); ok {
 		p.Code = e.Code
 	}
-	if _, err := f.Parse(text); err == nil {
+	_, withUnit := f.Parse(text)
+	if withUnit == nil {
 		p.Accepted = "a number alone: the column " + f.Key + " gives the unit"
+	} else if e, ok := withUnit.(*reading.Error); ok && e.Code == p.Code && e.Accepted != f.Accepted() {
+		p.Accepted = e.Accepted // it knows better, as how to write an ambiguous number
+	}
+	return p
+}
+
+// inColumn takes the units out of what a missing cell would accept: the column
+// has its own.
+func inColumn(p *dosing.Problem) *dosing.Problem {
+	if f, ok := reading.Lookup(p.Field); ok && p.Code == "missing" {
+		p.Accepted = strings.Replace(p.Accepted, f.Accepted(), f.AcceptedBare(), 1)
 	}
 	return p
 }

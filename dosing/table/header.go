@@ -58,16 +58,26 @@ func readHeader(s *scanner, o Options) (*header, error) {
 	for _, cell := range first.cells {
 		h.names = append(h.names, strings.ToLower(strings.TrimSpace(cell)))
 	}
-	if err := h.readings(); err != nil {
-		return nil, err
+	err = h.readings()
+	if err == nil {
+		err = h.supplied(o)
 	}
-	if err := h.supplied(o); err != nil {
-		return nil, err
+	if err == nil {
+		err = h.demands(o)
 	}
-	if err := h.demands(o); err != nil {
+	if err != nil && loneReturn(first.raw) {
+		return nil, fileProblem("line_ends", "", "lines that end in LF or CR LF; this file has CR alone")
+	}
+	if err != nil {
 		return nil, err
 	}
 	return h, h.choose(o)
+}
+
+// loneReturn reports a carriage return that no line feed follows: the whole
+// file is then one line here.
+func loneReturn(line []byte) bool {
+	return bytes.IndexByte(bytes.ReplaceAll(line, []byte("\r\n"), nil), '\r') >= 0
 }
 
 // separator tells a comma-separated file from a semicolon-separated one, whose
@@ -102,7 +112,7 @@ func (h *header) readings() error {
 	}
 	if known == 0 {
 		return fileProblem("no_header", reading.Clean(strings.Join(h.row.cells, string(h.comma))),
-			"a first row that names the columns, such as ph,alkalinity_mg_l_caco3,temperature_c")
+			"a first row that names the columns, with commas or semicolons between, such as ph,alkalinity_mg_l_caco3,temperature_c")
 	}
 	return nil
 }

@@ -37,14 +37,17 @@ type RowError struct {
 func (e *RowError) Error() string { return fmt.Sprintf("row %d: %s", e.Row, e.Problem.Error()) }
 
 // Run answers the rows of in onto out. A row that has no answer keeps its place
-// with a problem. The error is a *dosing.Problem for a file that cannot be
-// answered at all (nothing is written then), a *RowError for a strict run that
+// with a problem. The error is a *dosing.Problem for flags that cannot be used
+// or a file that cannot be answered at all (nothing is written then), a *RowError for a strict run that
 // stopped, or an error of in or out.
 //
 // NUL bytes are looked for in the whole of a file that can be rewound before
 // anything is written; of any other, before the first megabyte of answers is.
 func Run(in io.Reader, out io.Writer, o Options) (Summary, error) {
 	var sum Summary
+	if p := o.unusable(); p != nil {
+		return sum, p
+	}
 	if err := scanForNUL(in); err != nil {
 		return sum, err
 	}
@@ -82,6 +85,17 @@ func Run(in io.Reader, out io.Writer, o Options) (Summary, error) {
 		}
 	}
 	return sum, w.Flush()
+}
+
+// unusable is what is wrong with the flags whatever the rows hold; what they
+// leave out, the file may have.
+func (o Options) unusable() *dosing.Problem {
+	for _, p := range o.Form.Problems(o.Need) {
+		if p.Code != "missing" {
+			return p
+		}
+	}
+	return nil
 }
 
 // flushed writes out what is held and returns the error that ended the run.

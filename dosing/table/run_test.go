@@ -140,6 +140,75 @@ func TestNULInAStream(t *testing.T) {
 	}
 }
 
+// Nor does one hide behind a byte that makes the scanner look ahead.
+func TestNULAfterAReturnOrAQuote(t *testing.T) {
+	rows := strings.Repeat("7,30,10,"+strings.Repeat("x", 2000)+"\n", 100)
+	for _, last := range []string{"7,30,10\r\x00", "7,30,10,\"x\"\x00\n"} {
+		var out bytes.Buffer
+		_, err := Run(struct{ io.Reader }{strings.NewReader("ph,alkalinity_mg_l_caco3,temperature_c,note\n" + rows + last)}, &out, caustic())
+		var p *dosing.Problem
+		if !errors.As(err, &p) || p.Code != "nul_bytes" {
+			t.Errorf("%q: error %v, want nul_bytes", last, err)
+		}
+	}
+}
+
+// What is wrong with the flags is wrong with every row, so the file is not
+// begun; what the flags leave out is the file's to give.
+func TestFlagsThatCannotBeUsed(t *testing.T) {
+	const file = "ph,alkalinity_mg_l_caco3,temperature_c\n7,30,10\n"
+	for field, o := range map[string]Options{
+		"product":   {Form: entry.Form{Product: "nosuch", Values: map[string]string{"target-ph": "8.4"}}, Need: entry.NeedDose},
+		"target-ph": {Form: entry.Form{Product: "lime", Values: map[string]string{"target-ph": "15"}}, Need: entry.NeedDose},
+		"target-si": {Form: entry.Form{Product: "lime", Values: map[string]string{"target-ph": "8", "target-si": "0"}}, Need: entry.NeedDose},
+		"flow":      {Form: entry.Form{Product: "lime", Values: map[string]string{"target-ph": "8", "flow": "1,200"}}, Need: entry.NeedDose},
+		"strength":  {Form: entry.Form{Product: "caustic-25", Values: map[string]string{"target-ph": "8", "strength": "99"}}, Need: entry.NeedDose},
+		"add":       {Form: entry.Form{Adds: []string{"lime=x"}}, Need: entry.NeedWater},
+	} {
+		out, _, err := answer(t, file, o)
+		var p *dosing.Problem
+		if !errors.As(err, &p) || p.Field != field || out != "" {
+			t.Errorf("%s: error %v, %d bytes written", field, err, len(out))
+		}
+	}
+}
+
+// A cell's refusal says what the column takes, which has a unit of its own.
+func TestRefusalOfACell(t *testing.T) {
+	const header = "ph,alkalinity_mg_l_caco3,temperature_c\n"
+	for line, want := range map[string]string{
+		"7,\"1,200\",10": `ambiguous_number: alkalinity "1,200" can be read in two ways; accepted: write 1200 or 1.2`,
+		"7,abc,10":       `not_a_number: alkalinity "abc" is not a number; accepted: a number, 0 to 5000 mg/L as CaCO3`,
+		"7,30 meq/L,10":  `not_a_number: alkalinity "30 meq/L" is not a number; accepted: a number alone: the column alkalinity_mg_l_caco3 gives the unit`,
+		"7,,10":          `missing: alkalinity is missing; accepted: a number, 0 to 5000 mg/L as CaCO3`,
+		",30,10":         `missing: ph is missing; accepted: a number, 0 to 14; or a measured dic`,
+		"7,<5,10":        `detection_limit: alkalinity "<5" is a limit, not a measured number; accepted: the figure to work with, or nothing where none was measured`,
+		"":               `empty: row is empty; accepted: 3 cells, as in the first row`,
+	} {
+		out, _, err := answer(t, header+line+"\n7,30,10\n", caustic())
+		if err != nil {
+			t.Fatal(err)
+		}
+		if _, rows := cellsOf(t, out); len(rows) != 2 || rows[0]["problem"] != want {
+			t.Errorf("%q: %q, want %q", line, rows[0]["problem"], want)
+		}
+	}
+}
+
+// Carriage returns alone make one line of a file; at the end of the last line
+// one may be left of a file that was cut off.
+func TestCarriageReturnsAlone(t *testing.T) {
+	_, _, err := answer(t, "ph,alkalinity_mg_l_caco3,temperature_c\r7,30,10\r", caustic())
+	var p *dosing.Problem
+	if !errors.As(err, &p) || p.Code != "line_ends" {
+		t.Errorf("error %v, want line_ends", err)
+	}
+	out, sum, err := answer(t, "ph,alkalinity_mg_l_caco3,temperature_c\r\n7,30,10\r", caustic())
+	if err != nil || sum.Problems != 0 || strings.Count(out, "\r") != 2 || !strings.HasSuffix(out, ",\r") {
+		t.Errorf("%q, %+v, %v", out, sum, err)
+	}
+}
+
 func TestErrorsOfTheStreamsComeThrough(t *testing.T) {
 	broken := errors.New("broken")
 	in := io.MultiReader(strings.NewReader("ph,alkalinity_mg_l_caco3,temperature_c\n7,30,10\n"), failing{broken})

@@ -32,7 +32,7 @@ type row struct {
 	raw    []byte   // its text without the line ending, over-long cells cut
 	ends   []int    // offset in raw of the end of each cell
 	cells  []string // the cells without their quotes
-	ending string   // "\n", "\r\n", or "" at the end of a file without a final newline
+	ending string   // "\n", "\r\n", or at the end of a file "" or "\r"
 	fault  fault
 	at     int  // cell of the fault
 	messy  bool // raw would not be read back the same way: write the cells afresh
@@ -64,6 +64,7 @@ func (s *scanner) read() (byte, error) {
 	s.again, s.at = nil, 0
 	c, err := s.in.ReadByte()
 	if err == nil && c == 0 {
+		_ = s.in.UnreadByte() // so that who looks ahead does not step over it
 		return 0, errNUL
 	}
 	return c, err
@@ -178,6 +179,10 @@ func (s *scanner) cell(r *row) (last bool, err error) {
 			r.ending = "\r\n"
 			end()
 			return true, nil
+		case c == '\r' && s.ended(): // a file cut off within its last line ending
+			r.ending = "\r"
+			end()
+			return true, nil
 		default:
 			keep(c, true)
 			r.messy = r.messy || quoted
@@ -196,6 +201,15 @@ func (s *scanner) follows(c byte) bool {
 	}
 	s.back()
 	return false
+}
+
+// ended reports whether nothing more follows.
+func (s *scanner) ended() bool {
+	_, err := s.read()
+	if err == nil {
+		s.back()
+	}
+	return err == io.EOF
 }
 
 // reopen ends a row whose quote in its last cell is never closed (or not within

@@ -44,6 +44,7 @@ func TestCells(t *testing.T) {
 		"empty quotes":           {"\"\",x\n", [][]string{{"", "x"}}},
 		"quote inside":           {"5\" pipe,x\n", [][]string{{`5" pipe`, "x"}}},
 		"text after quotes":      {"\"a\"b,x\n", [][]string{{"ab", "x"}}},
+		"return at the end":      {"a,b\r", [][]string{{"a", "b"}}},
 		"return alone":           {"a\rb,c\n", [][]string{{"a\rb", "c"}}},
 		"quote never closed":     {"a,\"b,c\nd,e\n", [][]string{{"a", `"b`, "c"}, {"d", "e"}}},
 		"never closed, last row": {"a,\"b", [][]string{{"a", `"b`}}},
