@@ -1,0 +1,168 @@
+package tui
+
+import (
+	"errors"
+	"strconv"
+	"strings"
+
+	"beckline/dosing"
+	"beckline/dosing/entry"
+	"beckline/dosing/reading"
+	"beckline/dosing/report"
+)
+
+// Solver answers a case; dosing.Solve is the one in use. Its error is a
+// *dosing.Problem.
+type Solver func(dosing.Case) (*dosing.Result, error)
+
+// evaluation is what a sheet amounts to: an answer, or why there is none.
+type evaluation struct {
+	bad     map[string]string // by field: what is wrong and what is accepted
+	unsure  map[string]string // by field: an unusual value that nobody confirmed, and why
+	missing []string          // names of fields that an answer needs
+	result  *dosing.Result    // nil where nothing could be computed
+	solved  bool              // the result holds the dose
+	refusal *dosing.Problem   // the readings are fine and there is no such dose
+	failure *dosing.Problem   // anything else that stands in the way
+	curve   curve
+}
+
+// inspect looks at each place by itself: what cannot be used there, and what is
+// unusual and unconfirmed. It solves nothing.
+func inspect(s sheet) evaluation {
+	e := evaluation{bad: map[string]string{}, unsure: map[string]string{}}
+	for _, st := range s.stations() {
+		for _, p := range st.places {
+			e.look(s, p)
+		}
+	}
+	return e
+}
+
+// evaluate computes everything that the screen shows of a sheet.
+func evaluate(s sheet, solve Solver) evaluation {
+	e := inspect(s)
+	for i, a := range s.Adds {
+		if strings.TrimSpace(a.Dose) == "" {
+			e.missing = append(e.missing, "dose-"+strconv.Itoa(i+1))
+		}
+	}
+	for _, p := range s.form().Problems(entry.NeedDose) {
+		switch {
+		case p.Code == "missing":
+			e.missing = append(e.missing, p.Field)
+		case p.Field == reading.DoseField: // found at its place already
+		case e.bad[p.Field] == "" && p.Field != "":
+			e.bad[p.Field] = report.ProblemLine(p)
+		case p.Field == "" && e.failure == nil:
+			e.failure = p
+		}
+	}
+	if len(e.bad)+len(e.unsure) > 0 || e.failure != nil {
+		return e
+	}
+	if len(e.missing) == 0 {
+		e.answer(s, solve)
+		return e
+	}
+	for _, name := range e.missing {
+		if isReading(name) || strings.HasPrefix(name, "dose-") {
+			return e
+		}
+	}
+	e.waterOnly(s, solve) // only the target or the product is still to come
+	return e
+}
+
+// look checks what stands at one place.
+func (e *evaluation) look(s sheet, p place) {
+	text := s.text(p)
+	if p.kind != numberPlace || text == "" {
+		return
+	}
+	if p.add >= 0 {
+		e.lookDose(s, p, text)
+		return
+	}
+	v, err := p.field.Parse(text)
+	switch {
+	case err != nil:
+		e.bad[p.name] = err.Error()
+	case v.Unusual && s.Accepted[p.name] != text:
+		e.unsure[p.name] = v.UnusualWhy
+	}
+}
+
+// lookDose checks a dose that is given.
+func (e *evaluation) lookDose(s sheet, p place, text string) {
+	alone := entry.Form{Adds: []string{s.Adds[p.add].Product + "=" + text}}
+	for _, problem := range alone.Problems(entry.NeedWater) {
+		if problem.Field == reading.DoseField {
+			e.bad[p.name] = report.ProblemLine(problem)
+			return
+		}
+	}
+	c, err := entry.Form{
+		Values: map[string]string{"ph": "7", "alkalinity": "50", "temperature": "10"}, Adds: alone.Adds,
+	}.Case(entry.NeedWater)
+	if err != nil || s.Accepted[p.name] == text {
+		return
+	}
+	for _, note := range c.Notes {
+		if strings.HasPrefix(note.Code, "unusual_") {
+			e.unsure[p.name] = report.Sentence(note)
+		}
+	}
+}
+
+// answer solves the whole case.
+func (e *evaluation) answer(s sheet, solve Solver) {
+	c, err := s.form().Case(entry.NeedDose)
+	if err != nil {
+		e.refuse(err)
+		return
+	}
+	r, err := solve(c)
+	if err != nil {
+		e.refuse(err)
+		if e.refusal != nil || len(e.missing) > 0 {
+			e.waterOnly(s, solve)
+		}
+		return
+	}
+	e.result, e.solved = r, true
+	e.curve = doseCurve(r, solve)
+}
+
+// waterOnly solves the raw water without any addition.
+func (e *evaluation) waterOnly(s sheet, solve Solver) {
+	c, err := s.form().Case(entry.NeedWater)
+	if err != nil {
+		e.refuse(err)
+		return
+	}
+	c.Additions, c.Target = nil, dosing.Target{}
+	if r, err := solve(c); err == nil {
+		e.result = r
+	} else if e.refusal == nil {
+		e.refuse(err)
+	}
+}
+
+// refuse files a problem under what it means for the screen.
+func (e *evaluation) refuse(err error) {
+	var p *dosing.Problem
+	if !errors.As(err, &p) {
+		p = &dosing.Problem{Kind: dosing.Failed, Code: "failed", Accepted: err.Error()}
+	}
+	switch {
+	case p.Kind == dosing.NoAnswer:
+		e.refusal = p
+	case p.Code == "missing" || p.Code == "calcium_needed":
+		e.missing = append(e.missing, p.Field)
+	case p.Kind == dosing.BadInput && p.Field != "":
+		e.bad[p.Field] = report.ProblemLine(p)
+	default:
+		e.failure = p
+	}
+}

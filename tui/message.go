@@ -1,0 +1,159 @@
+package tui
+
+import (
+	"strconv"
+	"strings"
+
+	"beckline/dosing/report"
+	"beckline/tui/canvas"
+)
+
+// said is one thing to say and how.
+type said struct {
+	text  string
+	style canvas.Style
+}
+
+// drawMessages shows what there is to say, most urgent first.
+func (m *Model) drawMessages(c *canvas.Canvas, top int) {
+	y := top
+	for _, s := range m.messages() {
+		lines := canvas.Wrap(s.text, c.Width-2)
+		for i, line := range lines {
+			if y == top+messageRows {
+				return
+			}
+			if y == top+messageRows-1 && i < len(lines)-1 {
+				line = canvas.Cut(line+" "+lines[i+1], c.Width-2)
+			}
+			c.Text(1, y, line, s.style)
+			y++
+		}
+	}
+}
+
+// messages are the note of the last key, then questions and trouble, then the
+// warnings about the figures.
+func (m *Model) messages() []said {
+	var out []said
+	say := func(style canvas.Style, text string) { out = append(out, said{text, style}) }
+	if m.note != "" {
+		say(canvas.Good, m.note)
+	}
+	p := m.place()
+	switch {
+	case m.state == pasting:
+		say(canvas.Notice, m.pasteQuestion())
+	case m.asked:
+		say(canvas.Notice, p.label+" "+m.edit.String()+" is unusual: "+m.now.unsure[p.name]+
+			". Enter keeps it, Esc puts back what was there.")
+	case m.state == typing && m.paused && m.now.unsure[p.name] != "":
+		say(canvas.Notice, "unusual: "+m.now.unsure[p.name])
+	case m.state == typing && !m.paused:
+	case m.now.bad[p.name] != "":
+		say(canvas.Alarm, m.now.bad[p.name])
+	case m.now.unsure[p.name] != "":
+		say(canvas.Notice, "unusual: "+m.now.unsure[p.name]+". Enter twice keeps it.")
+	default:
+		m.sayTrouble(say)
+	}
+	if m.good.result != nil && len(out) < messageRows {
+		m.sayWarnings(say)
+	}
+	return out
+}
+
+// sayTrouble tells of trouble away from the place walked to.
+func (m *Model) sayTrouble(say func(canvas.Style, string)) {
+	for _, st := range m.line {
+		for _, p := range st.places {
+			if why := m.now.bad[p.name]; why != "" {
+				say(canvas.Alarm, why)
+				return
+			}
+			if why := m.now.unsure[p.name]; why != "" {
+				say(canvas.Notice, p.label+" is unusual: "+why+". Go there; Enter twice keeps it.")
+				return
+			}
+		}
+	}
+	for field, why := range m.now.bad { // of a field that is on no station
+		say(canvas.Alarm, field+": "+why)
+		return
+	}
+	switch {
+	case m.now.failure != nil:
+		say(canvas.Alarm, report.ProblemLine(m.now.failure))
+	case m.now.refusal != nil:
+		say(canvas.Alarm, report.ProblemLine(m.now.refusal))
+	}
+	if m.old && len(m.now.missing) > 0 {
+		var names []string
+		for _, name := range m.now.missing {
+			names = append(names, m.label(name))
+		}
+		say(canvas.Notice, "STILL NEEDED: "+strings.Join(names, ", "))
+	}
+	if o, ok := m.waitingDraft(); ok {
+		say(canvas.Good, "d takes up the draft of "+o.said)
+	}
+}
+
+// sayWarnings tells the first warning, and how many there are.
+func (m *Model) sayWarnings(say func(canvas.Style, string)) {
+	warnings := m.good.result.Warnings
+	if len(warnings) == 0 {
+		return
+	}
+	first := warnings[0]
+	for _, w := range warnings {
+		if alarms[w.Code] {
+			first = w
+			break
+		}
+	}
+	text, style := "Warning: ", canvas.Notice
+	if alarms[first.Code] {
+		text, style = "ALARM: ", canvas.Alarm
+	}
+	if n := len(warnings); n > 1 {
+		text = strings.TrimSuffix(text, ": ") + " 1 of " + strconv.Itoa(n) + " (w): "
+	}
+	text += report.Sentence(first)
+	if short := canvas.Cut(text, m.width-6); short != text && !m.look.linear {
+		text = short + " (w)" // one row; the key shows the rest
+	}
+	say(style, text)
+}
+
+// alarms are the warnings that come first.
+var alarms = map[string]bool{"over_use_level": true, "may_scale": true, "product_may_freeze": true}
+
+// pasteQuestion shows what would be entered.
+func (m *Model) pasteQuestion() string {
+	var parts []string
+	for _, p := range m.paste {
+		text := p.place.label + " " + p.text
+		switch {
+		case p.wrong != "":
+			text += " (cannot be used)"
+		case p.odd != "":
+			text += " (unusual)"
+		}
+		parts = append(parts, text)
+	}
+	return "Pasted: " + strings.Join(parts, ", ") + ". Enter enters them, Esc drops them."
+}
+
+// showWarnings opens a page with all warnings.
+func (m *Model) showWarnings() {
+	if m.good.result == nil || len(m.good.result.Warnings) == 0 {
+		m.note = "no warnings"
+		return
+	}
+	var b strings.Builder
+	for _, w := range m.good.result.Warnings {
+		b.WriteString(sentence(report.Sentence(w)) + "\n\n")
+	}
+	m.openPage(page{title: "warnings", text: b.String()})
+}

@@ -1,0 +1,142 @@
+package tui
+
+import (
+	"maps"
+	"slices"
+
+	"beckline/dosing/entry"
+	"beckline/dosing/reading"
+)
+
+// sheet is everything that a person has entered, as typed. It is what undo
+// steps through and what a draft holds; the answer follows from it alone.
+type sheet struct {
+	Values  map[string]string `json:"values"` // by field name, as typed; absent means not measured
+	Product string            `json:"product"`
+	Target  string            `json:"target"` // the field name of the kind of target in use
+	Adds    []feedEntry       `json:"adds,omitempty"`
+	// Accepted holds unusual values that the person has confirmed, by field.
+	Accepted map[string]string `json:"accepted,omitempty"`
+	Units    units             `json:"units,omitempty"`
+	// Demo says that the readings are those of the demo plant.
+	Demo bool `json:"demo,omitempty"`
+	// Untouched says that target and product are the ones the screen started
+	// with: nobody has chosen them yet.
+	Untouched bool `json:"untouched,omitempty"`
+}
+
+// feedEntry is one chemical fed at a dose that is given, ahead of the one that
+// is solved for.
+type feedEntry struct {
+	Product string `json:"product"`
+	Dose    string `json:"dose"` // as typed
+}
+
+// targets are the kinds of target in the order in which the screen offers them.
+var targets = []string{"target-ph", "target-alkalinity", "target-si", "target-ccpp"}
+
+// newSheet makes a sheet of a form. demo says that its readings are invented.
+func newSheet(f entry.Form, demo bool) sheet {
+	s := sheet{Values: map[string]string{}, Product: f.Product, Target: targets[0], Accepted: map[string]string{}, Demo: demo, Untouched: demo}
+	for name, text := range f.Values {
+		if text != "" {
+			s.Values[name] = text
+		}
+	}
+	for _, name := range targets {
+		if s.Values[name] != "" {
+			s.Target = name
+		}
+	}
+	for _, add := range f.Adds {
+		s.Adds = append(s.Adds, splitAdd(add))
+	}
+	return s
+}
+
+// splitAdd takes "PRODUCT=DOSE" apart.
+func splitAdd(add string) feedEntry {
+	for i, r := range add {
+		if r == '=' {
+			return feedEntry{Product: add[:i], Dose: add[i+1:]}
+		}
+	}
+	return feedEntry{Product: add}
+}
+
+// form is the sheet as the commands would be given it.
+func (s sheet) form() entry.Form {
+	f := entry.Form{Values: map[string]string{}, Product: s.Product}
+	for name, text := range s.Values {
+		if text == "" || name != s.Target && slices.Contains(targets, name) {
+			continue
+		}
+		f.Values[name] = text
+	}
+	for _, a := range s.Adds {
+		f.Adds = append(f.Adds, a.Product+"="+a.Dose)
+	}
+	return f
+}
+
+// clone is a copy that shares nothing.
+func (s sheet) clone() sheet {
+	s.Values = maps.Clone(s.Values)
+	s.Accepted = maps.Clone(s.Accepted)
+	s.Adds = slices.Clone(s.Adds)
+	return s
+}
+
+// equal reports whether nothing was changed.
+func (s sheet) equal(t sheet) bool {
+	return maps.Equal(s.Values, t.Values) && s.Product == t.Product && s.Target == t.Target &&
+		slices.Equal(s.Adds, t.Adds) && s.Units == t.Units && maps.Equal(s.Accepted, t.Accepted) && s.Demo == t.Demo && s.Untouched == t.Untouched
+}
+
+// own is the sheet with which a plant's own readings start: every number of
+// the demo plant is gone, so that none can mix with a real one. Product and
+// target stay as starting settings, and the screen says that nobody has chosen
+// them until somebody does.
+func (s sheet) own() sheet {
+	n := sheet{Values: map[string]string{}, Product: s.Product, Target: s.Target, Accepted: map[string]string{}, Units: s.Units, Untouched: s.Untouched}
+	if text := s.Values[s.Target]; text != "" {
+		n.Values[s.Target] = text
+	}
+	return n
+}
+
+// isReading reports whether a field is measured on the water.
+func isReading(name string) bool {
+	f, ok := reading.Lookup(name)
+	return ok && f.Group == reading.Reading
+}
+
+// whole gives a sheet that came from a file the parts that it may lack.
+func (s sheet) whole() sheet {
+	s = s.clone()
+	if s.Values == nil {
+		s.Values = map[string]string{}
+	}
+	if s.Accepted == nil {
+		s.Accepted = map[string]string{}
+	}
+	if _, known := unitNames[s.Units]; !known {
+		s.Units = unitsSI
+	}
+	if !slices.Contains(targets, s.Target) {
+		s.Target = targets[0]
+	}
+	s.Demo = false
+	return s
+}
+
+// readings counts the readings that are entered.
+func (s sheet) readings() int {
+	n := 0
+	for name := range s.Values {
+		if isReading(name) {
+			n++
+		}
+	}
+	return n
+}
