@@ -144,7 +144,10 @@ func (p *point) bracket(mode balance, given, protons float64) error {
 		mid := 0.5 * (lo + hi)
 		*p = start
 		p.start(start.k, &start.t, start.background)
-		p.imposed, p.ionic = start.imposed, start.ionic
+		// Where the fast way ended, its ionic strength may be anything.
+		if start.imposed {
+			p.imposed, p.ionic = true, start.ionic
+		}
 		p.setH(math.Exp(mid))
 		if !p.converge(mode, given) {
 			return ErrNoConvergence

@@ -119,7 +119,7 @@ func TestBlendConserves(t *testing.T) {
 		}
 		for i := range mix.Totals {
 			want := (x*a.Water.Totals[i] + y*b.Water.Totals[i]) / (x + y)
-			if math.Abs(mix.Totals[i]-want) > 1e-12*want {
+			if math.Abs(mix.Totals[i]-want) > 1e-12*want+1e-300 { // below, floats lose digits
 				t.Fatalf("%s: %g, want %g", carbonate.Component(i).Name(), mix.Totals[i], want)
 			}
 		}
@@ -130,8 +130,7 @@ func TestBlendConserves(t *testing.T) {
 	})
 }
 
-// The two ways to a pH, Newton and plain halving, agree; so does the buffer
-// intensity with a finite difference at the same activities.
+// The two ways to a pH, Newton and plain halving, agree.
 func TestIndependentRoutesAgree(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
 		s := anyWater(t)

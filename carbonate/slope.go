@@ -55,7 +55,7 @@ func (p *point) slopes(mode balance) slopes {
 	zM := (a*bM - x*bA) * det
 	zC := (rC - jCA*zA - jCM*zM) * iC
 	zS := (rS - jSA*zA - jSM*zM) * iS
-	if p.t[Carbon] == 0 && jCC == 0 {
+	if iC == 0 {
 		// No carbon yet: what the first of it brings. All its species scale with
 		// CO3, so their shares are those of an infinitesimal amount.
 		zC = p.protonsPerCarbon()
@@ -72,15 +72,19 @@ func (p *point) protonsPerCarbon() float64 {
 	return (bicarb + 2*acid) / (1 + bicarb + acid)
 }
 
+// traceOfNothing, mol/L, is so little that products of such amounts underflow:
+// a component below it counts as absent in the slopes.
+const traceOfNothing = 1e-100
+
 func inverse(x float64) float64 {
-	if x == 0 {
+	if x < traceOfNothing {
 		return 0
 	}
 	return 1 / x
 }
 
 func guard(x float64) float64 {
-	if x <= 0 {
+	if x < traceOfNothing {
 		return 1
 	}
 	return x

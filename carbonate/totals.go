@@ -67,7 +67,7 @@ var components = [Components]component{
 func (c Component) Name() string { return components[c].name }
 
 // Formula returns the formula whose mass a mg/L of the component means
-// (interface tables: nitrate as NO3, ammonia as N, silica as SiO2, ...).
+// (nitrate as NO3, ammonia as N, silica as SiO2, ...).
 func (c Component) Formula() string { return components[c].formula }
 
 // MolarMass returns the mass of that formula in g/mol.

@@ -4,7 +4,7 @@ package carbonate
 // linearly. Its pH follows from it (see Solve).
 type Water struct {
 	Totals     Totals
-	Alkalinity float64 // eq/L, the proton condition of model and doc.go; may be negative after acid
+	Alkalinity float64 // eq/L, the proton condition of doc.go; may be negative after acid
 	Background float64 // mol/L of ionic strength that the model's species do not explain, >= 0
 	Kelvin     float64 // temperature, K
 }

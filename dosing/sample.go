@@ -60,9 +60,42 @@ func (s *Sample) Solve(process, atPH *carbonate.Constants) (carbonate.State, err
 	return st, err
 }
 
-// Figure is the target's figure of a water of this sample, in the target's
-// unit; ok is false where that water has none.
-func (s *Sample) Figure(t Target, st *carbonate.State) (v float64, ok bool) {
-	look := search{target: t, known: s.known}
+// Walk carries a raw water through the additions of a case to a station (1 is
+// the first addition's), with a dose for each addition, mol/L (those of the
+// processes are not looked at), at the temperature of the constants. ok is false
+// where a step has no answer: breakpoint chlorination, a pH that no carbon gives.
+func (c *Case) Walk(k *carbonate.Constants, w carbonate.Water, doses []float64, to int) (carbonate.Water, bool) {
+	r := &run{c: c, k: k, doses: doses, known: known{calcium: true}}
+	w, p := r.through(w, 0, to)
+	return w, p == nil
+}
+
+// Plain says whether the additions up to a station only add to this raw water:
+// then they commute, and doses are sums of alkalinity and totals.
+func (c *Case) Plain(raw carbonate.Water, to int) bool {
+	r := &run{c: c}
+	r.base.Water = raw
+	return r.plain(to)
+}
+
+// Mix blends the raw waters of the sources of a case by flow and lets chlorine
+// and ammonia that meet in it combine, as Solve does.
+func (c *Case) Mix(streams ...carbonate.Stream) (carbonate.Water, bool) {
+	w, err := carbonate.Blend(streams...)
+	if err != nil {
+		return w, false
+	}
+	w, p := react(w, &Addition{})
+	return w, p == nil
+}
+
+// Figure is a target's figure of a water, in the target's unit; ok is false
+// where that water has none. organics says that organic acids were entered, so
+// that alkalinity means the titrated one. Calcium is taken as known.
+func (t Target) Figure(st *carbonate.State, organics bool) (v float64, ok bool) {
+	look := search{target: t, known: known{calcium: true, organics: organics}}
 	return look.figure(st)
 }
+
+// Organics says whether the sample has organic acids.
+func (s *Sample) Organics() bool { return s.known.organics }

@@ -54,12 +54,64 @@ func TestSampleIsSolve(t *testing.T) {
 		if w := want.Raw().Figures.Water; got.Water != w || got.PH != want.Raw().Figures.PH {
 			t.Errorf("%s: %+v pH %v, want %+v pH %v", name, got.Water, got.PH, w, want.Raw().Figures.PH)
 		}
-		v, ok := s.Figure(dosing.Target{Kind: dosing.TargetAlkalinity}, &got)
+		v, ok := dosing.Target{Kind: dosing.TargetAlkalinity}.Figure(&got, s.Organics())
 		if want := want.Raw().Figures.Alkalinity; !ok || v != want {
 			t.Errorf("%s: alkalinity as titrated %v %v, want %v", name, v, ok, want)
 		}
 	}
 	if _, err := dosing.NewSample(dosing.Readings{PH: dosing.Some(7)}); err == nil {
 		t.Error("a sample without alkalinity was taken")
+	}
+}
+
+// TestWalkIsSolve: walking a train with the doses of an answer ends at its
+// waters, with a tower, a contactor, chlorine and its demand on the way.
+func TestWalkIsSolve(t *testing.T) {
+	r := dosing.Readings{PH: dosing.Some(6.9), Alkalinity: dosing.Some(8e-4), Kelvin: dosing.Some(285),
+		Calcium: dosing.Some(2e-4), Ammonia: dosing.Some(2e-5)}
+	chlorine, _ := dosing.ProductByName("chlorine-gas")
+	caustic, _ := dosing.ProductByName("caustic-25")
+	c := dosing.Case{Readings: r, Target: dosing.Target{Kind: dosing.TargetPH, Value: 8.4}, Additions: []dosing.Addition{
+		{Process: dosing.Aeration, Share: dosing.Some(0.5)},
+		{Process: dosing.LimestoneContactor},
+		{Product: chlorine, Dose: dosing.Some(2e-5), Demand: dosing.Some(5e-6)},
+		{Product: caustic, Solve: true},
+	}}
+	want, err := dosing.Solve(c)
+	if err != nil {
+		t.Fatal(err)
+	}
+	raw := want.Raw().Figures.Water
+	k, err := carbonate.ConstantsAt(raw.Kelvin)
+	if err != nil {
+		t.Fatal(err)
+	}
+	doses := make([]float64, len(c.Additions))
+	for i := range doses {
+		doses[i] = want.Stations[i+1].Dose
+	}
+	for to := range want.Stations {
+		got, ok := c.Walk(k, raw, doses, to)
+		if !ok || got != want.Stations[to].Figures.Water {
+			t.Errorf("station %d: %+v, want %+v", to, got, want.Stations[to].Figures.Water)
+		}
+	}
+	if c.Plain(raw, 4) || !c.Plain(raw, 0) {
+		t.Error("a tower commutes")
+	}
+}
+
+// TestMixIsSolve: sources mixed by hand are the raw water of the blend.
+func TestMixIsSolve(t *testing.T) {
+	a := dosing.Readings{PH: dosing.Some(7.1), Alkalinity: dosing.Some(4e-3), Kelvin: dosing.Some(283)}
+	b := dosing.Readings{PH: dosing.Some(9.2), Alkalinity: dosing.Some(1e-3), Kelvin: dosing.Some(293)}
+	c := dosing.Case{Sources: []dosing.Source{{Name: "a", Readings: a, Flow: dosing.Some(2)}, {Name: "b", Readings: b, Flow: dosing.Some(3)}}}
+	want, err := dosing.Solve(c)
+	if err != nil {
+		t.Fatal(err)
+	}
+	got, ok := c.Mix(carbonate.Stream{Water: want.Sources[0].Water, Flow: 2}, carbonate.Stream{Water: want.Sources[1].Water, Flow: 3})
+	if !ok || got != want.Raw().Figures.Water {
+		t.Errorf("%+v, want %+v", got, want.Raw().Figures.Water)
 	}
 }
