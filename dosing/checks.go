@@ -12,12 +12,14 @@ const (
 	closurePH       = 1e-6  // pH
 	balanceRelative = 1e-9  // of the amounts that are balanced
 	balanceAbsolute = 1e-12 // eq/L or mol/L, for waters with next to nothing in them
+	targetAmount    = 1e-9  // eq/L or mol/L by which a target that is an amount may be missed
+	targetIndex     = 1e-6  // the same of a pH or an index
 )
 
-// check compares the finished water with other routes to it: the pH by plain
-// halving (and the target, where a pH was asked for); the alkalinity summed over
-// the species; the carbon that pH and alkalinity give back. A result that does
-// not close is not given.
+// check compares the finished water with other routes to it: the pH (the target,
+// where a pH was asked for) enclosed from both sides; the alkalinity summed over
+// the species; the carbon that pH and alkalinity give back; and every target at
+// its own station. A result that does not close is not given.
 func (r *run) check() *Problem {
 	fin := r.base
 	if n := len(r.states); n > 0 {
@@ -25,13 +27,17 @@ func (r *run) check() *Problem {
 	}
 	w := fin.Water
 
-	again, err := r.k.SolveByBracket(w)
-	if err != nil {
-		return &Problem{Kind: Failed, Code: "checks_disagree", Field: "closure_ph", Given: err.Error()}
-	}
-	closure := again.PH - fin.PH
+	closing := fin.PH
 	if r.solved >= 0 && r.c.Target.Kind == TargetPH && r.targetAt == len(r.states) {
-		closure = again.PH - r.c.Target.Value
+		closing = r.c.Target.Value
+	}
+	closure, enclosed := r.k.Encloses(closing, closurePH, w)
+	if !enclosed {
+		again, err := r.k.SolveByBracket(w)
+		if err != nil {
+			return &Problem{Kind: Failed, Code: "checks_disagree", Field: "closure_ph", Given: err.Error()}
+		}
+		closure = again.PH - closing
 	}
 	r.record("closure_ph", closure, closurePH)
 
@@ -50,7 +56,33 @@ func (r *run) check() *Problem {
 			return &Problem{Kind: Failed, Code: "checks_disagree", Field: c.Name, Value: Some(c.Value)}
 		}
 	}
+	if r.solved < 0 {
+		return nil
+	}
+	for _, t := range []Target{r.c.Target, r.c.Second} {
+		if p := r.missed(t); p != nil {
+			return p
+		}
+	}
 	return nil
+}
+
+// missed says whether the water that was to meet a target, solved afresh at its
+// station, does not.
+func (r *run) missed(t Target) *Problem {
+	if t.Kind == NoTarget {
+		return nil
+	}
+	look := search{target: t, known: r.known}
+	v, ok := look.figure(&r.states[r.targetAt-1])
+	tolerance := targetAmount
+	if t.Kind == TargetPH || t.Kind == TargetSaturationIndex {
+		tolerance = targetIndex
+	}
+	if ok && math.Abs(v-t.Value) <= tolerance {
+		return nil
+	}
+	return &Problem{Kind: Failed, Code: "checks_disagree", Field: t.Kind.Field(), Value: Some(v)}
 }
 
 // expected adds up alkalinity and carbon over the train by the equivalents and

@@ -9,6 +9,7 @@
 //	raw.go                 readings to the raw water: hardness forms, ionic strength, organic acids
 //	solve.go, steps.go     the train: each addition, chlorine's reactions, aeration, limestone
 //	target.go, reach.go    the dose for a target; the nearest value where there is none
+//	pair.go, pairscan.go   two doses for two targets: Newton, and the certain way behind it
 //	figures.go             everything shown of one water
 //	warnings.go, checks.go what to say beside the numbers; proof that they close
 //	chemicals.go           one row a pure substance

@@ -37,24 +37,35 @@ func (r *run) pair() *Problem {
 			return &Problem{Kind: BadInput, Code: "calcium_needed", Field: "calcium", Target: t}
 		}
 	}
-	d, ok := w.newton()
-	if ok && d[0] >= 0 && d[1] >= 0 {
-		for n, i := range w.at {
-			if d[n] > greatestDose(r.c.Additions[i].Product) {
-				ok = false
-			}
-			r.doses[i] = d[n]
-		}
-		if ok {
+	d, ok := w.newton([2]float64{})
+	if ok && w.take(d) {
+		return nil
+	}
+	// A no from there is not yet a no.
+	if start, found := w.scan(); found {
+		if near, ok := w.newton(start); ok && w.take(near) || w.take(start) {
 			return nil
 		}
 	}
 	return w.infeasible(d, ok)
 }
 
+// take sets the doses where both can be fed.
+func (w *pairWork) take(d [2]float64) bool {
+	for n, i := range w.at {
+		if !(d[n] >= 0 && d[n] <= greatestDose(w.r.c.Additions[i].Product)) {
+			return false
+		}
+	}
+	for n, i := range w.at {
+		w.r.doses[i] = d[n]
+	}
+	return true
+}
+
 // newton works on the equations continued in a straight line below zero doses,
 // so that a pair that needs a negative dose is found as such.
-func (w *pairWork) newton() (d [2]float64, ok bool) {
+func (w *pairWork) newton(d [2]float64) (_ [2]float64, ok bool) {
 	for range pairPasses {
 		base := [2]float64{max(d[0], 0), max(d[1], 0)}
 		f, ok := w.miss(base)

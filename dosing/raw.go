@@ -41,7 +41,7 @@ func raw(r *Readings) (s carbonate.State, kn known, warnings []Warning, err erro
 			return s, kn, nil, outside("ph-temperature", r.PHKelvin.Value, carbonate.MinKelvin, carbonate.MaxKelvin)
 		}
 	}
-	var ionsWin bool
+	var ionsWin, uncertain bool
 	if r.DIC.Given {
 		s, ionsWin, err = fromCarbon(k, r, w, in)
 		if err == nil && r.PH.Given {
@@ -49,6 +49,8 @@ func raw(r *Readings) (s carbonate.State, kn known, warnings []Warning, err erro
 		}
 	} else {
 		s, ionsWin, err = fromPH(reading, r, w, in)
+		// The carbon hangs on the pH where it was read, not where it is used.
+		uncertain = err == nil && carbonUncertain(&s)
 		if err == nil && reading != k {
 			// The sample is closed on its way from the pipe to the bench.
 			s, err = k.Solve(s.Water)
@@ -61,13 +63,13 @@ func raw(r *Readings) (s carbonate.State, kn known, warnings []Warning, err erro
 		warnings = append(warnings, Warning{Code: "ionic_strength_disagrees", Field: bulkReading(kn.route)})
 		kn.route = FromIons
 	}
-	if !r.DIC.Given && carbonUncertain(&s) {
+	if uncertain {
 		warnings = append(warnings, Warning{Code: "dic_uncertain", Field: "ph", Value: r.PH.Value})
 	}
 	if !kn.calcium {
 		warnings = append(warnings, Warning{Code: "calcium_needed", Field: "calcium"})
 	}
-	if v, ok := imbalance(r, &s.Water); ok && v > 0.10 {
+	if v, ok := imbalance(r, kn, &s.Water); ok && v > 0.10 {
 		warnings = append(warnings, Warning{Code: "charge_imbalance", Value: v, Limit: 0.10})
 	}
 	return s, kn, warnings, nil
@@ -230,10 +232,14 @@ func fromCarbon(k *carbonate.Constants, r *Readings, w carbonate.Water, in carbo
 	return s, ionsWin, titrated(k, r, w, &s, solve)
 }
 
-// titrated solves with the conserved alkalinity that belongs to the titrated one.
+// titrated solves with the conserved alkalinity that belongs to the titrated
+// one. A sample already at the end point has none to titrate: refused.
 func titrated(k *carbonate.Constants, r *Readings, w carbonate.Water, s *carbonate.State, solve func(carbonate.Water) error) error {
 	if !hasOrganics(&w) {
 		return solve(w)
+	}
+	if !r.DIC.Given && r.PH.Value <= endPointPH {
+		return outside("ph", r.PH.Value, endPointPH, 14)
 	}
 	// Start from what the organic acids alone hold at the end point.
 	start := w
@@ -246,18 +252,25 @@ func titrated(k *carbonate.Constants, r *Readings, w carbonate.Water, s *carbona
 	if err := solve(w); err != nil {
 		return err
 	}
-	for range 100 {
+	// Near the end point most of the carbon's alkalinity is left there, so plain
+	// repetition crawls; the straight line through two passes does not.
+	var in, out float64
+	for i := range 100 {
 		left, err := leftAtEndPoint(k, s.Water, r.Alkalinity.Value)
 		if err != nil {
 			return err
 		}
-		before := w.Alkalinity
-		w.Alkalinity = r.Alkalinity.Value + left
+		before, next := w.Alkalinity, r.Alkalinity.Value+left
+		if math.Abs(next-before) <= 1e-13*math.Abs(next)+1e-18 {
+			return nil
+		}
+		w.Alkalinity = next
+		if rate := (next - out) / (before - in); i > 0 && rate > 0 && rate < 0.999 {
+			w.Alkalinity = before + (next-before)/(1-rate)
+		}
+		in, out = before, next
 		if err := solve(w); err != nil {
 			return err
-		}
-		if math.Abs(w.Alkalinity-before) <= 1e-14*math.Abs(w.Alkalinity)+1e-18 {
-			return nil
 		}
 	}
 	return carbonate.ErrNoConvergence
@@ -288,16 +301,17 @@ func checkPH(k *carbonate.Constants, w carbonate.Water, pH float64) []Warning {
 }
 
 // carbonUncertain: above pH 10.5, or where carbonate brings less than a tenth of
-// the buffer, the carbon found from the pH hangs on its last digits.
+// the buffer, the carbon found from the pH hangs on its last digits. So it does
+// under pH 5, where nearly all of it is carbon dioxide and a tenth of a pH is a
+// quarter of the carbon.
 func carbonUncertain(s *carbonate.State) bool {
-	return s.PH > 10.5 || s.CarbonateBufferShare() < 0.1
+	return s.PH > 10.5 || s.PH < 5 || s.CarbonateBufferShare() < 0.1
 }
 
 // imbalance is |cations - anions| / (cations + anions) in equivalents, after
 // Standard Methods 1030 E (from memory), where all major ions were entered.
-func imbalance(r *Readings, w *carbonate.Water) (float64, bool) {
-	if !(w.Totals[carbonate.Calcium] > 0) || !r.Sodium.Given || !r.Chloride.Given || !r.Sulfate.Given ||
-		!(r.Magnesium.Given || r.Hardness.Given) {
+func imbalance(r *Readings, kn known, w *carbonate.Water) (float64, bool) {
+	if !kn.calcium || !kn.magnesium || !r.Sodium.Given || !r.Chloride.Given || !r.Sulfate.Given {
 		return 0, false
 	}
 	sum := math.Abs(w.Alkalinity)
@@ -323,6 +337,10 @@ func outside(field string, v, low, high float64) *Problem {
 
 // refusal turns the model's error into the operator's.
 func refusal(err error, r *Readings, k *carbonate.Constants, w carbonate.Water) *Problem {
+	var p *Problem
+	if errors.As(err, &p) {
+		return p
+	}
 	var out *carbonate.RangeError
 	switch {
 	case errors.Is(err, carbonate.ErrAlkalinityBelowPH):

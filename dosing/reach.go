@@ -8,6 +8,10 @@ const (
 	greatestAny       = 10.0
 	greatestCoagulant = 0.5
 	greatestChlorine  = 0.05 // as Cl2
+
+	// slurryHighPH: magnesium hydroxide stalls near pH 10 (common practice, no
+	// source), so it is not offered for a target close to that.
+	slurryHighPH = 9.5
 )
 
 // greatestDose is the largest dose that is accepted or looked at, mol/L.
@@ -32,11 +36,15 @@ func (r *run) couldReach() []string {
 			continue
 		}
 		seen[p.Chemical.Formula] = true
+		if p.Chemical.Formula == "Mg(OH)2" && r.c.Target.Kind == TargetPH && r.c.Target.Value > slurryHighPH {
+			continue
+		}
 		s, problem := r.search(p)
 		if problem != nil {
 			continue
 		}
 		s.most = min(s.most, s.plausible(&p))
+		s.onlyDirect = true
 		if _, problem := s.find(); problem == nil {
 			names = append(names, p.Name)
 		}

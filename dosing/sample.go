@@ -65,7 +65,7 @@ func (s *Sample) Solve(process, atPH *carbonate.Constants) (carbonate.State, err
 // processes are not looked at), at the temperature of the constants. ok is false
 // where a step has no answer: breakpoint chlorination, a pH that no carbon gives.
 func (c *Case) Walk(k *carbonate.Constants, w carbonate.Water, doses []float64, to int) (carbonate.Water, bool) {
-	r := &run{c: c, k: k, doses: doses, known: known{calcium: true}}
+	r := &run{c: c, k: k, doses: doses, held: true, known: known{calcium: true}}
 	w, p := r.through(w, 0, to)
 	return w, p == nil
 }

@@ -28,6 +28,7 @@ type run struct {
 	second   int             // index of the other solved addition, -1 for none
 	targetAt int             // how many additions the target's water has passed
 	doses    []float64
+	held     bool              // the doses are what they are: none is found anew for a residual
 	states   []carbonate.State // after each addition
 	warnings []Warning
 	res      Result

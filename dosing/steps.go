@@ -1,6 +1,7 @@
 package dosing
 
 import (
+	"errors"
 	"math"
 
 	"beckline/carbonate"
@@ -21,8 +22,19 @@ func (r *run) step(i int, w carbonate.Water, dose float64) (carbonate.Water, *Pr
 	case LimestoneContactor:
 		return r.contact(w)
 	}
+	if a.Residual.Given && !a.Solve && !r.held {
+		dose = residualDose(a, &w)
+		r.doses[i] = dose
+	}
 	w = w.Add(a.Product.reagent(), dose)
 	return react(w, a)
+}
+
+// residualDose is what leaves the residual after the demand, mol/L: less where
+// the water already has free chlorine, and never below none.
+func residualDose(a *Addition, w *carbonate.Water) float64 {
+	need := a.Residual.Value + a.Demand.Or(0) - w.Totals[carbonate.Chlorine]
+	return max(need, 0) / a.Product.Chemical.Adds[carbonate.Chlorine]
 }
 
 // react lets the water's demand reduce free chlorine, and what is left form
@@ -55,7 +67,9 @@ func (r *run) aerate(a *Addition, w carbonate.Water) (carbonate.Water, *Problem)
 	if a.PH.Given {
 		carbon, err := r.k.CarbonAt(a.PH.Value, w)
 		if err != nil {
-			return w, refusal(err, &r.c.Readings, r.k, w)
+			// What contradicts each other here is this pH and the water's alkalinity.
+			here := Readings{PH: a.PH, Alkalinity: Some(w.Alkalinity)}
+			return w, refusal(err, &here, r.k, w)
 		}
 		w.Totals[carbonate.Carbon] = carbon
 		return w, nil
@@ -65,8 +79,12 @@ func (r *run) aerate(a *Addition, w carbonate.Water) (carbonate.Water, *Problem)
 		return w, refusal(err, &r.c.Readings, r.k, w)
 	}
 	after, err := s.Aerate(a.Share.Or(1), a.AirCO2.Or(carbonate.AirCO2))
+	var out *carbonate.RangeError
+	if errors.As(err, &out) && out.Quantity != "ionic strength" {
+		return w, outside("aerate", out.Value, out.Low, out.High)
+	}
 	if err != nil {
-		return w, outside("aerate", a.Share.Or(1), 0, 1)
+		return w, refusal(err, &r.c.Readings, r.k, w)
 	}
 	return after, nil
 }
@@ -105,7 +123,7 @@ func (r *run) plain(to int) bool {
 	var sum carbonate.Totals = r.base.Water.Totals
 	for i := range to {
 		a := &r.c.Additions[i]
-		if a.Process != ChemicalFeed || a.Demand.Value > 0 {
+		if a.Process != ChemicalFeed || a.Demand.Value > 0 || a.Residual.Given {
 			return false
 		}
 		for j, v := range a.Product.Chemical.Adds {

@@ -59,6 +59,9 @@ func TestChloramine(t *testing.T) {
 	w := r.Finished().Figures.Water
 	near(t, "monochloramine as Cl2", w.Totals[carbonate.Monochloramine]*70.906e3, 4, 1e-9)
 	near(t, "free chlorine", w.Totals[carbonate.Chlorine], 0, 0)
+	if !warned(r, "chloramine_formed") {
+		t.Error("the loss of free chlorine is not said")
+	}
 	near(t, "ammonia left as N", w.Totals[carbonate.Ammonia]*14.007e3, 1-4*14.007/70.906, 1e-9)
 	// One equivalent for Cl2 -> HOCl + HCl, one for the chloramine.
 	near(t, "alkalinity used", (r.Raw().Figures.Water.Alkalinity-w.Alkalinity)/caco3(1), 4*1.412, 0.005)

@@ -1,6 +1,7 @@
 package dosing
 
 import (
+	"errors"
 	"math"
 
 	"beckline/carbonate"
@@ -27,13 +28,15 @@ func (t Target) met(figure float64) bool {
 // search is the look for one dose: the water that the reagent meets (with every
 // fixed addition already in it, since additions commute), and the target.
 type search struct {
-	k       *carbonate.Constants
-	base    carbonate.State
-	reagent carbonate.Reagent
-	target  Target
-	most    float64 // mol/L, the largest dose that may be looked at
-	known   known
-	after   func(dose float64) (carbonate.Water, bool) // the water at the target where the train does more than add; else nil
+	k          *carbonate.Constants
+	base       carbonate.State
+	reagent    carbonate.Reagent
+	target     Target
+	most       float64 // mol/L, the largest dose that may be looked at
+	known      known
+	after      func(dose float64) (carbonate.Water, bool) // the water at the target where the train does more than add; else nil
+	onlyDirect bool                                       // offers only: what the short way does not find is not offered
+	refused    error                                      // why the model had no figure at the last dose that had none
 }
 
 // figure is the target's figure of a state; ok is false where it does not exist.
@@ -69,6 +72,11 @@ func (s *search) find() (float64, *Problem) {
 		return 0, &Problem{Kind: BadInput, Code: "calcium_needed", Field: "calcium", Target: s.target}
 	}
 	now, ok := s.figure(&s.base)
+	if !ok && s.target.Kind == TargetSaturationIndex {
+		// No calcium or no carbonate yet: the index is below every number, and a
+		// dose may bring what is lacking.
+		now, ok = math.Inf(-1), true
+	}
 	if !ok {
 		return 0, &Problem{Kind: NoAnswer, Code: "no_such_figure", Field: s.target.Kind.Field(), Target: s.target}
 	}
@@ -77,6 +85,9 @@ func (s *search) find() (float64, *Problem) {
 	}
 	if dose, ok := s.direct(); ok {
 		return dose, nil
+	}
+	if s.onlyDirect && s.after == nil && (s.target.Kind == TargetPH || s.target.Kind == TargetAlkalinity) {
+		return 0, &Problem{Kind: NoAnswer, Code: "out_of_reach", Target: s.target}
 	}
 	return s.explore(now)
 }
@@ -109,6 +120,7 @@ func (s *search) direct() (float64, bool) {
 
 // at is the figure after a dose.
 func (s *search) at(dose float64) (v float64, ok bool) {
+	s.refused = nil
 	w := s.base.Water.Add(s.reagent, dose)
 	if s.after != nil {
 		var ok bool
@@ -118,6 +130,7 @@ func (s *search) at(dose float64) (v float64, ok bool) {
 	}
 	st, err := s.k.Solve(w)
 	if err != nil {
+		s.refused = err
 		return 0, false
 	}
 	return s.figure(&st)
@@ -136,9 +149,10 @@ const (
 // nearest figure on the way is the answer of its own.
 func (s *search) explore(now float64) (float64, *Problem) {
 	want := s.target.Value
-	side := want - now
+	side := math.Copysign(1, want-now)
 	best, bestDose := now, 0.0
 	last := 0.0
+	var ended *carbonate.RangeError // the model ended before the doses did
 	for i := 0; ; i++ {
 		dose := s.most * leastDose * math.Pow(10, float64(i)/stepsADecade)
 		if dose > s.most*(1+1e-12) {
@@ -146,7 +160,8 @@ func (s *search) explore(now float64) (float64, *Problem) {
 		}
 		v, ok := s.at(dose)
 		if !ok {
-			break // the ionic strength has left the model's range
+			errors.As(s.refused, &ended)
+			break
 		}
 		if (want-v)*side <= 0 {
 			return s.crossing(last, dose, side), nil
@@ -156,6 +171,9 @@ func (s *search) explore(now float64) (float64, *Problem) {
 		}
 		last = dose
 	}
+	// Still nearing the target where the activity equation ends: that, not the
+	// product, is why there is no answer.
+	cut := ended != nil && ended.Quantity == "ionic strength" && bestDose == last
 	// The best of the steps may have a better neighbour: a plateau with a top.
 	if bestDose > 0 {
 		step := math.Pow(10, 1.0/stepsADecade)
@@ -168,7 +186,13 @@ func (s *search) explore(now float64) (float64, *Problem) {
 	}
 	p := &Problem{Kind: NoAnswer, Code: "out_of_reach", Field: s.target.Kind.Field(), Target: s.target,
 		Nearest: Some(best), NearestAt: Some(bestDose)}
-	if bestDose == 0 {
+	switch {
+	case math.IsInf(best, 0):
+		p.Code, p.Nearest, p.NearestAt = "no_such_figure", None, None
+	case cut:
+		p.Code, p.Field = "ionic_strength", ""
+		p.Value, p.High = Some(ended.Value), Some(ended.High)
+	case bestDose == 0:
 		p.Code = "wrong_side"
 	}
 	return 0, p

@@ -17,7 +17,6 @@ const (
 	ironLowPH                       = 5.0
 	lowBuffer                       = 1e-4           // eq/L per pH
 	useLevel                        = 0.1            // kg/m3 of a caustic or an acid where no certified level is entered
-	usualChlorine                   = 0.005          // kg/m3 as Cl2
 	hoclLow, hoclHigh               = 278.15, 308.15 // K, range of Morris's data
 )
 
@@ -26,6 +25,10 @@ func (r *run) warn() {
 	r.warnWater(&r.res.Stations[0], "raw")
 	for i := 1; i < len(r.res.Stations); i++ {
 		st := &r.res.Stations[i]
+		before := r.res.Stations[i-1].Figures.Water.Totals[carbonate.Monochloramine]
+		if st.Figures.Water.Totals[carbonate.Monochloramine] > before {
+			r.add(Warning{Code: "chloramine_formed", Field: st.Addition.Product.Name})
+		}
 		r.warnWater(st, st.Addition.Product.Name)
 		r.warnAddition(st)
 	}
@@ -44,6 +47,11 @@ func (r *run) warnWater(st *Station, where string) {
 	}
 	if f.SaturationIndex.Value > scaleIndex || f.CCPP.Value > scaleCCPP {
 		r.add(Warning{Code: "may_scale", Field: where, Value: f.SaturationIndex.Value, Limit: scaleIndex})
+	}
+	// More carbon dioxide than water holds under the pure gas cannot be in an open
+	// sample: pH and alkalinity contradict each other.
+	if k, err := carbonate.ConstantsAt(f.Water.Kelvin); err == nil && f.FreeCO2 > k.Henry {
+		r.add(Warning{Code: "co2_above_saturation", Field: where, Value: f.FreeCO2, Limit: k.Henry})
 	}
 	if f.Water.Totals[carbonate.Chlorine] > 0 && (f.Water.Kelvin < hoclLow || f.Water.Kelvin > hoclHigh) {
 		r.add(Warning{Code: "chlorine_constant_extrapolated", Field: where, Value: f.Water.Kelvin})
@@ -88,16 +96,30 @@ func (r *run) warnAddition(st *Station) {
 	} else if isCausticOrAcid(chem) && st.Feed.PureMass > useLevel {
 		r.add(Warning{Code: "over_use_level", Field: name, Value: st.Feed.PureMass, Limit: useLevel})
 	}
-	if usual := usualDose(chem); st.Feed.PureMass > usual && !isCausticOrAcid(chem) {
+	if usual := usualDose(chem); st.Feed.PureMass > usual && (usual < useLevel || !isCausticOrAcid(chem)) {
 		r.add(Warning{Code: "unusual_dose", Field: name, Value: st.Feed.PureMass, Limit: usual})
 	}
 }
 
+// usualDoses are the doses, kg/m3 of the component that counts, above which a
+// drinking-water plant would look twice.
+var usualDoses = []struct {
+	of   carbonate.Component
+	most float64
+}{
+	{carbonate.Chlorine, 0.005},   // as Cl2; common practice, no source
+	{carbonate.Fluoride, 0.0015},  // as F; WHO guideline value, from memory
+	{carbonate.Ammonia, 0.002},    // as N; common practice, no source
+	{carbonate.Phosphate, 0.0016}, // as P, 5 mg/L as PO4; common practice, no source
+}
+
 // usualDose is the dose above which a drinking-water plant would look twice,
-// kg/m3 of the chemical (common practice, no source).
+// kg/m3 of the chemical.
 func usualDose(c *Chemical) float64 {
-	if n := c.Adds[carbonate.Chlorine]; n > 0 {
-		return usualChlorine * c.MolarMass / (n * carbonate.Chlorine.MolarMass())
+	for _, u := range usualDoses {
+		if n := c.Adds[u.of]; n > 0 {
+			return u.most * c.MolarMass / (n * u.of.MolarMass())
+		}
 	}
 	return useLevel
 }

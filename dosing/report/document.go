@@ -1,6 +1,10 @@
 package report
 
-import "beckline/dosing"
+import (
+	"beckline/dosing"
+	"beckline/dosing/batch"
+	"beckline/dosing/margin"
+)
 
 // Document is a whole answer in the units of its keys. It is made by New from
 // a Result and nothing else.
@@ -13,6 +17,13 @@ type Document struct {
 	Checks   []Check
 
 	result *dosing.Result
+	batch  *batch.Plan // nil where no tank is planned
+
+	margin  *margin.Margin // nil where none was worked out
+	trusted bool           // a margin was asked for, though there may be none
+	usual   bool           // with the usual tolerances
+	ways    *ways          // nil where none was tried
+	working string         // the worked sheet, "" where none is asked for
 }
 
 // Station is one step of the water's path.

@@ -10,6 +10,7 @@ type Figure struct {
 	Value  Number // in Unit; unused where IsText
 	Text   string // for figures that are words
 	IsText bool
+	truth  *bool // for yes and no: Text says it to people, programs get a boolean
 	shown  rounding
 }
 

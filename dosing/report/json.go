@@ -30,7 +30,18 @@ func (d Document) JSON() ([]byte, error) {
 		}
 		o.add("doses", doses)
 	}
+	if d.batch != nil {
+		o.add("batch", batchJSON(d.batch))
+	}
 	o.add("finished", fields(d.Finished))
+	o.add("stations", d.stationsJSON())
+	o.add("warnings", d.warningsJSON())
+	o.add("checks", d.checksJSON())
+	d.addTrust(&o)
+	return indented(o)
+}
+
+func (d Document) stationsJSON() []object {
 	stations := make([]object, len(d.Stations))
 	for i, s := range d.Stations {
 		stations[i].add("kind", s.Kind)
@@ -42,22 +53,27 @@ func (d Document) JSON() ([]byte, error) {
 		}
 		stations[i].add("water", fields(s.Water))
 	}
-	o.add("stations", stations)
+	return stations
+}
+
+func (d Document) warningsJSON() []object {
 	warnings := make([]object, len(d.Warnings))
 	for i, w := range d.Warnings {
 		warnings[i].add("code", w.Code)
 		warnings[i].addText("field", w.Field)
 		warnings[i].add("message", w.Message)
 	}
-	o.add("warnings", warnings)
+	return warnings
+}
+
+func (d Document) checksJSON() []object {
 	checks := make([]object, len(d.Checks))
 	for i, c := range d.Checks {
 		checks[i].add("name", c.Name)
 		checks[i].add("value", c.Value)
 		checks[i].add("agrees", c.Agrees)
 	}
-	o.add("checks", checks)
-	return indented(o)
+	return checks
 }
 
 // object is a JSON object that keeps its keys in the order of adding.
@@ -81,6 +97,10 @@ func (o *object) addText(key, text string) {
 }
 
 func (o *object) addFigure(f Figure) {
+	if f.truth != nil {
+		o.add(f.Key, *f.truth)
+		return
+	}
 	if f.IsText {
 		o.addText(f.Key, f.Text)
 		return

@@ -34,7 +34,6 @@ var reasons = map[string]string{
 	"not_chlorine":             "is no form of chlorine, so it has no demand or residual",
 	"breakpoint_chlorination":  "brings more than 5 of chlorine to 1 of ammonia nitrogen by mass: breakpoint chemistry is not computed here",
 	"pair_out_of_reach":        "cannot be met together with the first target by these two products",
-	"same_product":             "is the same product twice: two doses need two products",
 	"same_target":              "is the same figure twice: two targets need two figures",
 	"two_and_two":              "needs as many targets as products that are solved for",
 	"three_solved":             "is a third product to solve for; at most two are",
@@ -113,6 +112,9 @@ func reason(p *dosing.Problem) string {
 // given is plain ASCII.
 func ProblemLine(p *dosing.Problem) string {
 	first := p.Field + " " + quoted(Given(p)) + " " + reason(p)
+	if plantFileCode(p.Code) { // what was given says it all
+		first = p.Field + " in " + Given(p)
+	}
 	switch p.Code {
 	case "pump_too_small":
 		first = "pump is too small: it would have to run at " + Given(p) + " of its output"

@@ -70,6 +70,11 @@ var sentences = map[string]func(w dosing.Warning) string{
 		"dilute the product or use a smaller pump"),
 	"chlorine_constant_extrapolated": says("the constant of hypochlorous acid was measured from 5 to 35 C only; " +
 		"the water is outside that"),
+	"co2_above_saturation": says("this pH and alkalinity mean more carbon dioxide than water holds under the pure gas; " +
+		"one of the two readings is wrong"),
+	"chloramine_formed": func(w dosing.Warning) string {
+		return about(w) + "the free chlorine combines with the ammonia in the water; what is left of it is monochloramine, not free chlorine"
+	},
 	"taken_as_dissolved":      says("taken as fully dissolved; what stays as grit or is still dissolving does not count yet"),
 	"organic_acid_alkalinity": says("the acid titrates only in part: a measured alkalinity will read above the one shown"),
 }

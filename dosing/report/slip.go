@@ -45,6 +45,9 @@ func (d Document) Slip() string {
 		fmt.Fprintf(&b, "%s\n", strings.TrimRight(fmt.Sprintf("  %-22s%10s%10s  %s",
 			raw.Label, finished.Show(), raw.Show(), raw.Unit), " "))
 	}
+	if trust := d.TrustLine(); trust != "" {
+		line("trust", trust)
+	}
 	line("warnings", orNone(strings.ReplaceAll(d.WarningCodes(), ";", ", ")))
 	for _, c := range d.CautionLines() {
 		b.WriteString(wrapLine("! "+c, slipWidth) + "\n")

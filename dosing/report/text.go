@@ -21,17 +21,27 @@ func (d Document) Text() string {
 		if i > 0 {
 			b.WriteByte('\n')
 		}
-		b.WriteString(answer(s, d.result.Case.Readings.Flow, len(doses) > 1))
+		if d.batch != nil {
+			d.writeBatch(&b)
+		}
+		if d.batch == nil || s.Feed.HasFlow {
+			b.WriteString(answer(s, d.result.Case.Readings.Flow, len(doses) > 1))
+		}
 		b.WriteString(doseLines(s, d.targetWords()))
 	}
 	if len(doses) > 0 {
 		b.WriteByte('\n')
 	}
+	d.writeTrust(&b)
 	d.writeAdditions(&b)
 	d.writeWaters(&b)
 	d.writeWarnings(&b)
 	d.writeCautions(&b)
 	d.writeChecks(&b)
+	d.writeWays(&b)
+	if d.working != "" {
+		b.WriteString("\nWORKED SHEET\n\n" + d.working)
+	}
 	return ASCII(b.String())
 }
 
@@ -232,6 +242,9 @@ func (d Document) writeChecks(b *strings.Builder) {
 	var parts []string
 	for _, c := range d.Checks {
 		name, unit := checkLabel(c.Name)
+		if name == "" {
+			continue
+		}
 		parts = append(parts, name+" by "+difference(c.Value.Value)+unit)
 	}
 	b.WriteString("\n" + Wrap("Checked: the water solved afresh by another route differs in "+
@@ -246,6 +259,8 @@ func checkLabel(name string) (label, unit string) {
 		return "alkalinity", " mg/L"
 	case "carbon_balance":
 		return "carbon", " mmol/L"
+	case "hand_method", "forward_titration": // told by the ways
+		return "", ""
 	}
 	return strings.ReplaceAll(name, "_", " "), ""
 }
