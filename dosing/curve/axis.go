@@ -52,6 +52,8 @@ func figureAxis(kind dosing.TargetKind) Axis {
 		return alkalinityAxis("finished water")
 	case dosing.TargetSaturationIndex:
 		return Axis{Label: "calcite saturation index of the finished water", Factor: 1, Decimals: 2}
+	case dosing.TargetDIC:
+		return Axis{Label: "inorganic carbon of the finished water", Unit: "mmol/L", Factor: 1000, Decimals: 3}
 	case dosing.TargetCCPP:
 		return Axis{Label: "CCPP of the finished water", Unit: "mg/L as CaCO3", Factor: milligramsCaCO3, Decimals: 1}
 	}
@@ -67,6 +69,8 @@ func figure(kind dosing.TargetKind, f *dosing.Figures) dosing.Optional {
 		return f.SaturationIndex
 	case dosing.TargetCCPP:
 		return f.CCPP
+	case dosing.TargetDIC:
+		return dosing.Some(f.DIC)
 	}
 	return dosing.Some(f.PH)
 }

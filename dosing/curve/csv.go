@@ -106,4 +106,6 @@ func codes(warnings []dosing.Warning) []string {
 	return list
 }
 
-func number(v float64) string { return strconv.FormatFloat(v, 'g', -1, 64) }
+// number writes 15 digits, so that 6.5 mg/L that went through mol/L and back is
+// 6.5 and not 6.500000000000001.
+func number(v float64) string { return strconv.FormatFloat(v, 'g', 15, 64) }

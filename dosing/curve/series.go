@@ -95,6 +95,8 @@ func name(c *dosing.Case, solved int) string {
 		return title + " to alkalinity " + value + " " + y.Unit
 	case dosing.TargetSaturationIndex:
 		return title + " to saturation index " + value
+	case dosing.TargetDIC:
+		return title + " to inorganic carbon " + value + " " + y.Unit
 	case dosing.TargetCCPP:
 		return title + " to CCPP " + value + " " + y.Unit
 	}

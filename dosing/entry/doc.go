@@ -9,6 +9,9 @@
 //	target.go   exactly one target
 //	product.go  products by name, strength, pump
 //	addition.go PRODUCT=DOSE with its basis
+//	tolerance.go  how far off each reading may be
+//	units.go    the unit in which each reading was typed
+//	product_at.go  a product at a strength, a dose of it, apart from any form
 //	nearest.go  names near an unknown one
 //	demo.go     the demo plant
 //

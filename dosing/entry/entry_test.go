@@ -193,7 +193,7 @@ func TestWhatIsMissingIsNamed(t *testing.T) {
 		{plant().with("alkalinity", ""), NeedDose, "alkalinity", "mg/L as CaCO3"},
 		{plant().with("temperature", ""), NeedDose, "temperature", "0 to 50 °C"},
 		{plant().with("temperature", " "), NeedWater, "temperature", "°F"},
-		{plant().with("target-ph", ""), NeedDose, "target-ph", "target-alkalinity, target-si or target-ccpp"},
+		{plant().with("target-ph", ""), NeedDose, "target-ph", "target-alkalinity, target-si, target-ccpp or target-dic"},
 		{plant().withProduct(""), NeedDose, "product", "caustic-25"},
 		{Form{}, NeedDose, "ph", "0 to 14"},
 	} {

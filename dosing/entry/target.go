@@ -1,6 +1,7 @@
 package entry
 
 import (
+	"slices"
 	"strings"
 
 	"beckline/dosing"
@@ -52,6 +53,21 @@ func (w *filling) target() {
 	case len(given) > wanted:
 		w.problem("two_targets", given[wanted], andList(given), "two targets at a time")
 	}
+}
+
+// Target reads the one target of a form without a dose to reach it, such as
+// that of a blend. Its kind is NoTarget where none is given. The error is a
+// *dosing.Problem.
+func (f Form) Target() (dosing.Target, error) {
+	if !slices.ContainsFunc(fields, func(field reading.Field) bool { return field.Group == reading.Target && !f.blank(field.Name) }) {
+		return dosing.Target{}, nil
+	}
+	w := &filling{form: Form{Values: f.Values}}
+	w.target()
+	if len(w.problems) > 0 {
+		return dosing.Target{}, w.problems[0]
+	}
+	return w.result.Target, nil
 }
 
 // two reports whether a second product is to be solved for.

@@ -312,7 +312,7 @@ func TestFieldNamesAndKeys(t *testing.T) {
 		acetate=acetate_mg_l formate=formate_mg_l citrate=citrate_mg_l
 		dic=dic_mmol_l conductivity=conductivity_us_cm tds=tds_mg_l
 		target-ph=target_ph target-alkalinity=target_alkalinity_mg_l_caco3
-		target-si=target_saturation_index target-ccpp=target_ccpp_mg_l_caco3
+		target-si=target_saturation_index target-ccpp=target_ccpp_mg_l_caco3 target-dic=target_dic_mmol_l
 		strength=strength_percent product-temperature=product_temperature_c pump=pump_l_h`)
 	var got []string
 	for _, f := range Fields() {

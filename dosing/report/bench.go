@@ -107,9 +107,9 @@ func estimates(key, title string, all []bench.Estimate) SheetTable {
 func estimateRow(e bench.Estimate) []Figure {
 	u := unknownUnits[e.Unknown]
 	n := func(key, label string, v float64) Figure { return number(key, label, "", Some(v*u.factor), u.shown) }
-	return []Figure{worded("unknown", "", u.key), worded("name", "figure", e.Unknown.Name()),
+	return []Figure{worded("unknown", "", u.key), worded("name", "", e.Unknown.Name()), worded("", "figure", u.key+", "+u.unit),
 		n("start", "as read", e.Start), n("value", "found", e.Value), n("standard_error", "+/-", e.StandardError),
-		n("low", "95 % from", e.Low), n("high", "to", e.High), worded("unit", "unit", u.unit), truth("at_limit", "", e.AtLimit)}
+		n("low", "95 % from", e.Low), n("high", "to", e.High), worded("unit", "", u.unit), truth("at_limit", "", e.AtLimit)}
 }
 
 func readingsOf(in Bench) SheetTable {

@@ -14,5 +14,9 @@
 //	text.go       the text for people
 //	slip.go       the plain slip and the line for the shift log
 //	sentence.go   a sentence for each warning
-//	problem.go    a line and a JSON object for each refusal
+//	problem.go    a line and a JSON object for each refusal; problem_*.go their words
+//	margin.go ways.go slips.go   what speaks for and against a dose
+//	sheet.go      the answer of a command that is about something else than a water
+//	bench.go trim.go drawdown.go store.go thinning.go   such answers
+//	equipment.go  a sentence for each code of the feed equipment
 package report

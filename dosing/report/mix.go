@@ -113,11 +113,11 @@ func (m Mix) Text() string {
 	if m.a.NothingNeeded {
 		b.WriteString("The water keeps to every limit as it stands: nothing is needed\n\n")
 	} else {
-		fmt.Fprintf(&b, "Least cost: %s a ML (1000 m3)", m.money(best.CostML()))
+		first := "Least cost: " + m.money(best.CostML()) + " a ML (1000 m3)"
 		if y := best.CostYear(); y.Given {
-			fmt.Fprintf(&b, ", %s a year at %s", strings.TrimSpace(Fixed(y.Value, 0)+" "+m.currency), flowText(best.Result.Case.Readings.Flow))
+			first += fmt.Sprintf(", %s a year at %s", strings.TrimSpace(Fixed(y.Value, 0)+" "+m.currency), flowText(best.Result.Case.Readings.Flow))
 		}
-		b.WriteByte('\n')
+		b.WriteString(Wrap(first, textWidth) + "\n")
 		for i, s := range mixStations(best) {
 			figures := Dose(&s)
 			line := fmt.Sprintf("  %s: %s, %s a ML", s.Addition.Product.Name, doseText(figures), m.money(best.Doses[i].CostM3*litresPerM3))

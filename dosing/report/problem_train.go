@@ -28,6 +28,8 @@ var trainReasons = map[string]string{
 	"limit_twice":          "has two ranges",
 	"no_price":             "has no price, so it is not among what may be dosed",
 	"too_many_products":    "are too many products for one mix",
+	"target_twice":         "is the same figure twice: two targets need two figures",
+	"dose_range_crossed":   "has a least dose above its ceiling",
 	"product_twice":        "is among the products twice",
 	"target_beside_limits": "is a target, and a mix has limits instead",
 	"fixed_dose_needed":    "needs a dose ahead of a mix",

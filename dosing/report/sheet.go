@@ -104,9 +104,9 @@ func (t SheetTable) write(b *strings.Builder) {
 		return
 	}
 	fmt.Fprintf(b, "\n%s\n", Wrap(t.Title, textWidth))
-	var columns []int // those with a label
+	var columns []int // those with a label and something in them
 	for i, f := range t.Rows[0] {
-		if f.Label != "" {
+		if f.Label != "" && slices.ContainsFunc(t.Rows, func(row []Figure) bool { return row[i].Show() != "-" }) {
 			columns = append(columns, i)
 		}
 	}

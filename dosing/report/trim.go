@@ -66,7 +66,7 @@ func TrimSheet(in Trim) Sheet {
 			number("set_mg_l", "set", "mg/L", dose(c.Dose), asDose),
 			worded("test", "", c.Cause.Test()),
 		})
-		reasons.Notes = append(reasons.Notes, fmt.Sprintf("would be %s %s; %s", asCCPP.write(size), unit, c.Cause.Test()))
+		reasons.Notes = append(reasons.Notes, fmt.Sprintf("would be %s %s; %s", causeText(size, unit), unit, c.Cause.Test()))
 	}
 	s.Tables = append(s.Tables, reasons, stepsTable(in, at, grams))
 	if p := in.Plan; p != nil {
@@ -88,6 +88,13 @@ func causeSize(c trim.Reason) (float64, string) {
 		return c.Size * carbonDioxideMass * milli, "mg/L CO2"
 	}
 	return c.Size, c.Cause.Unit()
+}
+
+func causeText(size float64, unit string) string {
+	if unit == "pH" {
+		return asIndex.write(size)
+	}
+	return asCCPP.write(size)
 }
 
 func stepsTable(in Trim, at *dosing.Station, grams float64) SheetTable {

@@ -73,17 +73,11 @@ func (l *Line) Case(f entry.Form, need entry.Need) (dosing.Case, error) {
 	if f.Values == nil {
 		f.Values = map[string]string{}
 	}
-	blended := len(l.Shares) > 1 && !hasWater(f)
+	blended := len(l.Shares) > 1 && len(f.Sources) == 0 && !hasWater(f)
 	if blended { // stands in until the sources take its place
 		maps.Copy(f.Values, l.Shares[0].Source.Readings)
 	}
-	if own := l.site.ProductNamed(f.Product); own != nil {
-		f.Product = own.Catalogue
-	}
-	f.Adds = make([]string, len(typed.Adds))
-	for i, add := range typed.Adds {
-		f.Adds[i] = l.site.inCatalogue(add)
-	}
+	f = l.catalogued(f)
 	c, err := f.Case(need)
 	if err != nil {
 		return dosing.Case{}, err
@@ -98,6 +92,32 @@ func (l *Line) Case(f entry.Form, need entry.Need) (dosing.Case, error) {
 	}
 	l.equip(&c, typed)
 	return c, nil
+}
+
+// catalogued is a form with the catalogue's names in place of the plant's own.
+func (l *Line) catalogued(f entry.Form) entry.Form {
+	for _, name := range []*string{&f.Product, &f.Second, &f.TargetAfter} {
+		if own := l.site.ProductNamed(*name); own != nil {
+			*name = own.Catalogue
+		}
+	}
+	f.Adds, f.Thens = l.inCatalogue(f.Adds), l.inCatalogue(f.Thens)
+	return f
+}
+
+// Problems lists all that is wrong with a form on this line before a case is
+// made of it, its own limits aside.
+func (l *Line) Problems(f entry.Form, need entry.Need) []*dosing.Problem {
+	return l.catalogued(f).Problems(need)
+}
+
+// inCatalogue puts the catalogue's names into additions.
+func (l *Line) inCatalogue(adds []string) []string {
+	out := make([]string, len(adds))
+	for i, add := range adds {
+		out[i] = l.site.inCatalogue(add)
+	}
+	return out
 }
 
 // hasWater reports whether a form holds readings of a water.
@@ -159,14 +179,19 @@ func (l *Line) check(c *dosing.Case, f entry.Form, blended bool) *dosing.Problem
 }
 
 // equip gives the additions what the plant knows of its products. Additions
-// stand in the order of the form, the solved one last.
+// stand in the order of the form: those ahead, the solved ones, those behind.
 func (l *Line) equip(c *dosing.Case, typed entry.Form) {
-	names := make([]string, 0, len(typed.Adds)+1)
-	for _, add := range typed.Adds {
-		name, _, _ := strings.Cut(add, "=")
-		names = append(names, strings.TrimSpace(name))
+	texts := slices.Clone(typed.Adds)
+	texts = append(texts, typed.Product)
+	if typed.Second != "" {
+		texts = append(texts, typed.Second)
 	}
-	names = append(names, typed.Product)
+	texts = append(texts, typed.Thens...)
+	names := make([]string, len(texts))
+	for i, text := range texts {
+		name, _, _ := strings.Cut(text, "=")
+		names[i] = strings.TrimSpace(name)
+	}
 	next := 0
 	for i := range c.Additions {
 		a := &c.Additions[i]
@@ -185,11 +210,19 @@ func (l *Line) equip(c *dosing.Case, typed entry.Form) {
 		if own == nil {
 			continue
 		}
-		if a.Solve {
+		switch {
+		case a.Solve && at == len(typed.Adds):
 			l.equipSolved(a, own, typed)
 			continue
+		case a.Solve: // the second one: the settings in the form are the first's
+			a.Product = own.product
+			own.feed(a, true)
+			if pump := l.pumpFor(names[at]); pump != nil {
+				a.Feed.PumpCapacity = pump.Output
+			}
+			continue
 		}
-		if d, err := reading.ParseDose(typed.Adds[at]); err == nil && d.Basis == "product" && a.Dose.Given {
+		if d, err := reading.ParseDose(texts[at]); err == nil && d.Basis == "product" && a.Dose.Given {
 			a.Dose.Value *= own.product.Strength / a.Product.Strength // stated as this plant's product
 		}
 		a.Product = own.product
@@ -229,4 +262,16 @@ func (p *Product) feed(a *dosing.Addition, sameStrength bool) {
 			a.Feed.ProductKelvin = dosing.Some(v.SI)
 		}
 	}
+}
+
+// Equipment is what the line has to feed one of its own products with, and how
+// far it may go: temperature and density in the tank, the pump's output, the
+// certified maximum use level.
+func (l *Line) Equipment(p *Product) dosing.FeedSetup {
+	var a dosing.Addition
+	p.feed(&a, true)
+	if pump := l.pumpFor(p.Name); pump != nil {
+		a.Feed.PumpCapacity = pump.Output
+	}
+	return a.Feed
 }

@@ -7,11 +7,12 @@ import (
 
 	"beckline/dosing"
 	"beckline/dosing/entry"
+	"beckline/dosing/margin"
 	"beckline/dosing/reading"
 	"beckline/dosing/report"
 )
 
-// answer works one row out. The cells are those of report.Columns.
+// answer works one row out. The cells are those of Options.columns.
 func (h *header) answer(r *row, o Options) (cells []string, unusual bool, p *dosing.Problem) {
 	if p := h.unusable(r); p != nil {
 		return nil, false, p
@@ -20,13 +21,22 @@ func (h *header) answer(r *row, o Options) (cells []string, unusual bool, p *dos
 	if p != nil {
 		return nil, false, p
 	}
-	c, err := form.Case(o.Need)
+	read := form.Case
+	if o.Plant != nil {
+		read = func(need entry.Need) (dosing.Case, error) { return o.Plant.Case(form, need) }
+	}
+	c, err := read(o.Need)
 	if err != nil {
 		return nil, false, inColumn(asProblem(err))
 	}
 	result, err := dosing.Solve(c)
 	if err != nil {
 		return nil, false, asProblem(err)
+	}
+	if o.Plant != nil && o.Need == entry.NeedDose {
+		if broken := o.Plant.CheckFinished(result); len(broken) > 0 {
+			return nil, false, broken[0]
+		}
 	}
 	document := report.New(result)
 	if !document.Agrees() {
@@ -36,7 +46,19 @@ func (h *header) answer(r *row, o Options) (cells []string, unusual bool, p *dos
 	for _, w := range document.Warnings {
 		unusual = unusual || strings.HasPrefix(w.Code, "unusual_")
 	}
-	return document.Cells(), unusual, nil
+	if o.margins() {
+		m, err := margin.Of(result, *o.Tolerances, o.Margin)
+		if err != nil {
+			return nil, false, asProblem(err)
+		}
+		cells = document.WithMargin(m, false).MarginCells()
+	} else {
+		cells = document.Cells()
+	}
+	if o.two() {
+		cells = beforeNotes(cells, document.SecondCells())
+	}
+	return cells, unusual, nil
 }
 
 // unusable says why a row cannot be read at all.
@@ -69,7 +91,8 @@ func cellCount(n int) string {
 // form puts the row's cells and the flags together. An empty cell is not
 // measured.
 func (h *header) form(r *row, o Options) (entry.Form, *dosing.Problem) {
-	form := entry.Form{Values: maps.Clone(o.Form.Values), Product: o.Form.Product, Adds: o.Form.Adds}
+	form := o.Form
+	form.Values = maps.Clone(o.Form.Values)
 	if form.Values == nil {
 		form.Values = map[string]string{}
 	}

@@ -3,6 +3,7 @@ package table
 import (
 	"bytes"
 	"fmt"
+	"maps"
 	"slices"
 	"strings"
 
@@ -31,7 +32,7 @@ type header struct {
 }
 
 // readHeader takes the first row and settles the separator by it.
-func readHeader(s *scanner, o Options) (*header, error) {
+func readHeader(s *scanner, o *Options) (*header, error) {
 	h := &header{product: -1}
 	start, _ := s.in.Peek(MaxCell)
 	if i := bytes.IndexByte(start, 0); i >= 0 {
@@ -60,10 +61,11 @@ func readHeader(s *scanner, o Options) (*header, error) {
 	}
 	err = h.readings()
 	if err == nil {
-		err = h.supplied(o)
+		err = h.supplied(*o)
 	}
 	if err == nil {
-		err = h.demands(o)
+		h.defaults(o)
+		err = h.demands(*o)
 	}
 	if err != nil && loneReturn(first.raw) {
 		return nil, fileProblem("line_ends", "", "lines that end in LF or CR LF; this file has CR alone")
@@ -71,7 +73,7 @@ func readHeader(s *scanner, o Options) (*header, error) {
 	if err != nil {
 		return nil, err
 	}
-	return h, h.choose(o)
+	return h, h.choose(*o)
 }
 
 // loneReturn reports a carriage return that no line feed follows: the whole
@@ -132,6 +134,26 @@ func (h *header) supplied(o Options) error {
 	return nil
 }
 
+// defaults takes what the plant supplies for what neither file nor flags have. A
+// column of the file stands for its empty cells too: they were not measured. A
+// target column, or one flag, takes the place of every target of the plant.
+func (h *header) defaults(o *Options) {
+	if o.Form.Product == "" && h.product < 0 {
+		o.Form.Product = o.Defaults.Product
+	}
+	target := slices.ContainsFunc(h.fields, func(f reading.Field) bool { return f.Group == reading.Target })
+	values := maps.Clone(o.Defaults.Values)
+	maps.DeleteFunc(values, func(name, _ string) bool {
+		f, _ := reading.Lookup(name)
+		return h.has(*o, name) || target && f.Group == reading.Target || h.product >= 0 && f.Group == reading.Setting
+	})
+	if len(values) == 0 {
+		return
+	}
+	maps.Copy(values, o.Form.Values)
+	o.Form.Values = values
+}
+
 // has tells whether a reading comes from the file or from a flag.
 func (h *header) has(o Options, name string) bool {
 	if _, ok := o.Form.Values[name]; ok {
@@ -179,7 +201,7 @@ func (h *header) missing(keys []string, flag string) error {
 // choose settles which columns are added. A raw figure that is one of the
 // file's own readings is not repeated, unless another reading can change it.
 func (h *header) choose(o Options) error {
-	for i, c := range report.Columns() {
+	for i, c := range o.columns() {
 		switch {
 		case o.Need != entry.NeedDose && !inWater(c):
 			continue

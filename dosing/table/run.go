@@ -7,10 +7,12 @@ import (
 	"errors"
 	"fmt"
 	"io"
+	"slices"
 	"strings"
 
 	"beckline/dosing"
 	"beckline/dosing/entry"
+	"beckline/dosing/margin"
 	"beckline/dosing/report"
 )
 
@@ -19,7 +21,45 @@ type Options struct {
 	Form   entry.Form // what the flags supply for every row
 	Need   entry.Need // a dose, or the water's figures alone
 	Strict bool       // stop at the first row with a problem
+
+	Defaults entry.Form     // what a plant supplies where neither the file nor a flag does: values and product
+	Plant    Plant          // whose limits and products hold; nil for none
+	Progress func(rows int) // told of rows answered now and then; nil for nobody
+
+	Tolerances *margin.Tolerances // how far off each reading may be; nil for no margin, which costs
+	Margin     margin.Options
 }
+
+// Plant is what rows need of a plant's line.
+type Plant interface {
+	Problems(f entry.Form, need entry.Need) []*dosing.Problem
+	Case(f entry.Form, need entry.Need) (dosing.Case, error)
+	CheckFinished(r *dosing.Result) []*dosing.Problem
+}
+
+// columns are those of an answer, with its margin where one is asked for, and
+// the second dose where there are two.
+func (o Options) columns() []report.Column {
+	columns := report.Columns()
+	if o.margins() {
+		columns = report.MarginColumns()
+	}
+	if o.two() {
+		columns = beforeNotes(columns, report.SecondColumns())
+	}
+	return columns
+}
+
+// beforeNotes puts more in front of the last two: warnings and problem.
+func beforeNotes[T any](all, more []T) []T {
+	return slices.Insert(all, len(all)-2, more...)
+}
+
+// two tells whether rows get two doses.
+func (o Options) two() bool { return o.Form.Second != "" && o.Need == entry.NeedDose }
+
+// margins tells whether rows get a margin.
+func (o Options) margins() bool { return o.Tolerances != nil && o.Need == entry.NeedDose }
 
 // Summary counts what was done.
 type Summary struct {
@@ -52,7 +92,7 @@ func Run(in io.Reader, out io.Writer, o Options) (Summary, error) {
 		return sum, err
 	}
 	s := newScanner(in)
-	h, err := readHeader(s, o)
+	h, err := readHeader(s, &o)
 	if err != nil {
 		return sum, fileError(err)
 	}
@@ -90,7 +130,11 @@ func Run(in io.Reader, out io.Writer, o Options) (Summary, error) {
 // unusable is what is wrong with the flags whatever the rows hold; what they
 // leave out, the file may have.
 func (o Options) unusable() *dosing.Problem {
-	for _, p := range o.Form.Problems(o.Need) {
+	problems := o.Form.Problems
+	if o.Plant != nil {
+		problems = func(need entry.Need) []*dosing.Problem { return o.Plant.Problems(o.Form, need) }
+	}
+	for _, p := range problems(o.Need) {
 		if p.Code != "missing" {
 			return p
 		}
@@ -118,9 +162,14 @@ func (c *counter) Write(p []byte) (int, error) {
 	return n, err
 }
 
+const progressEvery = 200
+
 // one answers and writes one row.
 func (h *header) one(w *bufio.Writer, r *row, o Options, sum *Summary) error {
 	sum.Rows++
+	if o.Progress != nil && sum.Rows%progressEvery == 0 {
+		o.Progress(sum.Rows)
+	}
 	cells, unusual, p := h.answer(r, o)
 	if unusual {
 		sum.Unusual++
@@ -131,6 +180,12 @@ func (h *header) one(w *bufio.Writer, r *row, o Options, sum *Summary) error {
 		}
 		sum.Problems++
 		cells = report.ProblemCells(p)
+		if o.margins() {
+			cells = report.MarginProblemCells(p)
+		}
+		if o.two() {
+			cells = beforeNotes(cells, make([]string, len(report.SecondColumns())))
+		}
 	}
 	return h.writeRow(w, r, cells)
 }
