@@ -86,7 +86,9 @@ func TestDiluteBalance(t *testing.T) {
 			t.Fatalf("%+v, %v", u, err)
 		}
 		// Weak caustic made weaker cools by a hair: the table has a least at 20 waters.
-		if r.Heat.Known && (r.Heat.Rise < -0.2 || r.Heat.Rise > 150) {
+		// The most is pure acid with about its own moles of water and 0.8 more: 37 kJ
+		// by Thomsen's formula and up to 9 % above it, into 131 g at about 1.9 J/(g K).
+		if r.Heat.Known && (r.Heat.Rise < -0.2 || r.Heat.Rise > 165) {
 			t.Fatalf("%s %g to %g warms by %g K", d, from, to, r.Heat.Rise)
 		}
 	})
