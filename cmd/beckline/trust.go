@@ -145,7 +145,8 @@ func (t *trustFlags) margin(d report.Document, j *job, r *dosing.Result) (report
 	case err != nil: // the answer stands without its margin
 		return d.WithoutMargin(), nil
 	}
-	return d.WithMargin(m, !typed), nil
+	own := j.line != nil && len(j.line.Tolerances) > 0
+	return d.WithMargin(m, !typed && !own), nil
 }
 
 // evidence is what is known besides the case: the units in which the readings
