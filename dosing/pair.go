@@ -53,7 +53,7 @@ func (r *run) pair() *Problem {
 // take sets the doses where both can be fed.
 func (w *pairWork) take(d [2]float64) bool {
 	for n, i := range w.at {
-		if !(d[n] >= 0 && d[n] <= greatestDose(w.r.c.Additions[i].Product)) {
+		if !(d[n] >= 0 && d[n] <= GreatestDose(w.r.c.Additions[i].Product)) {
 			return false
 		}
 	}

@@ -40,7 +40,7 @@ type pairPoint struct {
 
 // along walks up the doses of one product, none first.
 func (w *pairWork) along(outer, inside int) (d [2]float64, ok bool) {
-	most := greatestDose(w.r.c.Additions[w.at[outer]].Product)
+	most := GreatestDose(w.r.c.Additions[w.at[outer]].Product)
 	last := w.point(outer, inside, 0)
 	for i := 0; ; i++ {
 		dose := most * scanLeast * math.Pow(10, float64(i)/scanADecade)

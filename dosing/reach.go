@@ -14,8 +14,9 @@ const (
 	slurryHighPH = 9.5
 )
 
-// greatestDose is the largest dose that is accepted or looked at, mol/L.
-func greatestDose(p Product) float64 {
+// GreatestDose is the largest dose of a product that is accepted or looked at,
+// mol/L of its chemical's formula.
+func GreatestDose(p Product) float64 {
 	c := &p.Chemical
 	switch {
 	case c.Coagulant != NotCoagulant:

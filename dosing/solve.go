@@ -114,7 +114,7 @@ func (r *run) planOne(i int, a *Addition) *Problem {
 	default:
 		return &Problem{Kind: BadInput, Code: "missing", Field: "dose", Given: a.Product.Name}
 	}
-	if most := greatestDose(a.Product); !(r.doses[i] >= 0 && r.doses[i] <= most) {
+	if most := GreatestDose(a.Product); !(r.doses[i] >= 0 && r.doses[i] <= most) {
 		return &Problem{Kind: BadInput, Code: "dose_outside_range", Field: "dose", Given: a.Product.Name,
 			Value: Some(r.doses[i] * chem.MolarMass), Low: Some(0), High: Some(most * chem.MolarMass)}
 	}
@@ -148,7 +148,7 @@ func (r *run) dose() *Problem {
 // addition. Where the additions only add they commute, so all the others, also
 // those that follow, go into the water first and the dose comes last.
 func (r *run) search(product Product) (*search, *Problem) {
-	s := &search{k: r.k, reagent: product.reagent(), target: r.c.Target, most: greatestDose(product), known: r.known}
+	s := &search{k: r.k, reagent: product.reagent(), target: r.c.Target, most: GreatestDose(product), known: r.known}
 	r.doses[r.solved] = 0
 	w, p := r.through(r.base.Water, 0, r.targetAt)
 	if p != nil {

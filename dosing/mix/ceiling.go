@@ -3,30 +3,9 @@ package mix
 import (
 	"errors"
 
-	"beckline/carbonate"
 	"beckline/dosing"
 	"beckline/dosing/feed"
 )
-
-// Hard stops on a dose, kg/m3 of the chemical, as for a single dose (common
-// practice, no source); a test holds them to what dosing.Solve accepts.
-const (
-	greatestAny       = 10.0
-	greatestCoagulant = 0.5
-	greatestChlorine  = 0.05 // as Cl2
-)
-
-// hardStop is the largest dose of a product, mol/L.
-func hardStop(p *dosing.Product) float64 {
-	c := &p.Chemical
-	switch {
-	case c.Coagulant != dosing.NotCoagulant:
-		return greatestCoagulant / c.MolarMass
-	case c.Adds[carbonate.Chlorine] > 0:
-		return greatestChlorine / (c.Adds[carbonate.Chlorine] * carbonate.Chlorine.MolarMass())
-	}
-	return greatestAny / c.MolarMass
-}
 
 // reach is what a product can be fed at, other than not at all.
 type reach struct {
@@ -43,7 +22,7 @@ const inside = 1 - 1e-10
 func reachOf(c *Candidate, flow dosing.Optional) (reach, *dosing.Problem) {
 	chem := &c.Product.Chemical
 	r := reach{perMol: chem.MolarMass / c.Product.Strength}
-	r.most, r.mostFrom = hardStop(&c.Product), FromHardStop
+	r.most, r.mostFrom = dosing.GreatestDose(c.Product), FromHardStop
 	least := func(kg float64, from Source) {
 		if v := kg / r.perMol; v > r.least {
 			r.least, r.leastFrom = v, from

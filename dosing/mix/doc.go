@@ -1,6 +1,5 @@
 // Package mix chooses among several chemicals at once: the mix of least cost
-// that keeps the finished water within every limit (Solve), and the two doses
-// that meet two targets (Pair).
+// that keeps the finished water within every limit.
 //
 // # Method
 //
@@ -38,5 +37,4 @@
 //	search                   search.go, descend.go, cut.go, branch.go, simplex.go
 //	what limits cost         explain.go
 //	why there is no mix      conflict.go
-//	two targets              pair.go
 package mix

@@ -53,7 +53,7 @@ func randomTask(t testing.TB, r *rand.Rand, n int) (task Task, ok bool) {
 		}
 		task.Candidates = append(task.Candidates, c)
 		if r.Float64() < 0.7 {
-			aim = aim.Add(reagent(&c.Product), most/c.Product.Chemical.MolarMass*uniform(0, 0.8))
+			aim = aim.Add(carbonate.Reagent{Adds: c.Product.Chemical.Adds, Equivalents: c.Product.Chemical.Equivalents}, most/c.Product.Chemical.MolarMass*uniform(0, 0.8))
 		}
 	}
 	s, err := carbonate.Solve(aim)

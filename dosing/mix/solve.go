@@ -97,7 +97,7 @@ func newSolver(t Task) (*solver, *dosing.Problem) {
 		s.ceiling = append(s.ceiling, r.most)
 		s.set.products = append(s.set.products, c.Product)
 		s.set.perMol = append(s.set.perMol, c.perMolPrice(&r))
-		s.set.hardStops = append(s.set.hardStops, hardStop(&c.Product))
+		s.set.hardStops = append(s.set.hardStops, dosing.GreatestDose(c.Product))
 	}
 	s.p = s.set.build(t.Limits, s.ceiling)
 	for i := range s.reach {

@@ -458,13 +458,13 @@ func TestHardStops(t *testing.T) {
 	for _, p := range dosing.Products() {
 		c := upland(t)
 		c.Readings.Alkalinity, c.Readings.PH = dosing.Some(2*caco3(2000)), dosing.Some(8.0)
-		c.Additions = []dosing.Addition{{Product: p, Dose: dosing.Some(hardStop(&p) * 1.001)}}
+		c.Additions = []dosing.Addition{{Product: p, Dose: dosing.Some(dosing.GreatestDose(p) * 1.001)}}
 		_, err := dosing.Solve(c)
 		var problem *dosing.Problem
 		if !errors.As(err, &problem) || problem.Code != "dose_outside_range" {
 			t.Errorf("%s: a thousandth over the hard stop: %v", p.Name, err)
 		}
-		c.Additions[0].Dose = dosing.Some(hardStop(&p))
+		c.Additions[0].Dose = dosing.Some(dosing.GreatestDose(p))
 		if _, err = dosing.Solve(c); errors.As(err, &problem) && problem.Code == "dose_outside_range" {
 			t.Errorf("%s: the hard stop itself is refused", p.Name)
 		}
