@@ -116,7 +116,7 @@ func TestEveryFieldHasItsPlace(t *testing.T) {
 		switch f.Group {
 		case reading.Reading:
 			readings++
-			place := slot(&r, f.Name)
+			place := r.Named(f.Name)
 			if place == nil || places[place] != "" {
 				t.Errorf("%s has no place of its own (shares %q)", f.Name, places[place])
 			}
@@ -132,7 +132,7 @@ func TestEveryFieldHasItsPlace(t *testing.T) {
 	if n := reflect.TypeOf(r).NumField(); n != readings {
 		t.Errorf("%d readings in the table and %d in the case", readings, n)
 	}
-	if slot(&r, "pump") != nil {
+	if r.Named("pump") != nil {
 		t.Error("a setting has a place among the readings")
 	}
 }

@@ -105,7 +105,7 @@ func (w truth) read(r *rand.Rand) dosing.Readings {
 		if n, err := reading.Number(f.Show(v)); err == nil {
 			v = f.FromBare(n)
 		}
-		*place(&out, f.Name) = dosing.Some(v)
+		*out.Named(f.Name) = dosing.Some(v)
 	}
 	return out
 }
@@ -251,7 +251,7 @@ func TestCaughtAmongOrdinary(t *testing.T) {
 		right := 0
 		for range waters {
 			c, _, x := ordinary(t, r)
-			v := place(&c.Readings, s.field)
+			v := c.Readings.Named(s.field)
 			v.Value *= s.factor
 			x.Burette, x.Measured = nil, nil
 			x.Units = map[string]string{"flow": "MGD (US)"}

@@ -23,7 +23,7 @@ func readings(r dosing.Readings, x *Context) []Finding {
 		if !found {
 			break
 		}
-		*place(&r, best.Field) = best.Meant
+		*r.Named(best.Field) = best.Meant
 		out = append(out, best)
 	}
 	return out
@@ -38,7 +38,7 @@ func strongest(r *dosing.Readings, x *Context) (best Finding, found bool) {
 		}
 		for _, m := range meanings(f, v.Value, x.Units[f.Name]) {
 			q := *r
-			*place(&q, f.Name) = dosing.Some(m.value)
+			*q.Named(f.Name) = dosing.Some(m.value)
 			after := terms(&q, x)
 			gain := loss(before) - loss(after) - m.prior
 			if gain < enough || found && gain <= best.Weight || !sits(after, f.Name) {
