@@ -79,7 +79,7 @@ func (k *Constants) idealGuess(carbon, protons float64) float64 {
 }
 
 const (
-	stepTolerance = 1e-12 // in ln h, on the predicted remaining error
+	stepTolerance = 1e-11 // in ln h, on the predicted remaining error
 	stepLimit     = 80
 	longestStep   = 1.5 // in ln h
 )
