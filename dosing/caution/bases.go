@@ -1,5 +1,8 @@
 package caution
 
+// solidCaustic is the line that strong caustic alone needs.
+const solidCaustic = "50 % caustic goes solid near 12 C: trace the line, expect a blocked pump."
+
 func bases() []Sheet {
 	strong := []Line{
 		{"Turns skin and eyes to soap; the burn goes deep before it hurts. Strong solutions feel slippery, not sharp.", cp},
@@ -12,7 +15,7 @@ func bases() []Sheet {
 				"Caustic soda burns eyes and skin: face shield, long gloves, apron.",
 				"Caustic in the eye: rinse at once, 30 min, then a doctor.",
 				"Dilute caustic into cold water, slowly; never water into caustic: it boils.",
-				"50 % caustic goes solid near 12 C: trace the line, expect a blocked pump.",
+				solidCaustic,
 			},
 			GHS:        danger(clp+" (H290 by suppliers)", "H314 from 2 %", "H290", "H314"),
 			Hazards:    strong,

@@ -75,10 +75,17 @@ func For(key string) Sheet {
 	}
 }
 
-// Of returns the sheet of a product, its freezing point being that of the
-// product at its own strength.
+// strongCaustic is the mass fraction of NaOH from which the line on going solid
+// in a cool room belongs on the panel; weaker caustic freezes far below 0 C.
+const strongCaustic = 0.4
+
+// Of returns the sheet of a product, its freezing point and its short lines
+// being those of the product at its own strength.
 func Of(p dosing.Product) Sheet {
 	s := For(p.Caution)
 	s.Freezing = freezingOf(p)
+	if p.Chemical.Formula == "NaOH" && p.Strength < strongCaustic {
+		s.Short = slices.DeleteFunc(slices.Clone(s.Short), func(line string) bool { return line == solidCaustic })
+	}
 	return s
 }

@@ -1,8 +1,9 @@
 package feed
 
 const (
-	turndown = 0.10 // of the output at 100 %; below it feed pulses (common practice, no source)
-	rounding = 1e-9 // lets what is exactly at a limit pass
+	fullStretch = 0.90 // of the output at 100 %; above it nothing is left to trim with (common practice, no source)
+	turndown    = 0.10 // of the output at 100 %; below it feed pulses (common practice, no source)
+	rounding    = 1e-9 // lets what is exactly at a limit pass
 )
 
 // withPump adds the pump's share of its output at 100 %. Below a tenth, feed is
@@ -20,6 +21,9 @@ func (r Rates) withPump(capacity float64) (Rates, error) {
 	}
 	if r.PumpFraction > 0 && r.PumpFraction < turndown {
 		r.Codes = append(r.Codes, CodePumpBelowTurndown)
+	}
+	if r.PumpFraction > fullStretch {
+		r.Codes = append(r.Codes, CodePumpNearLimit)
 	}
 	return r, nil
 }

@@ -17,6 +17,7 @@ const (
 	CodeDensityAt20C      = "density_at_20c"       // the product is not at 20 C and no table has its temperature
 	CodeProductMayFreeze  = "product_may_freeze"   // the product is below the point at which it freezes or crystallises
 	CodeDensityBeyond     = "density_beyond_table" // the strength is up to 2 % above the last published density
+	CodePumpNearLimit     = "pump_near_limit"      // the pump would run above nine tenths of its output
 	CodePumpBelowTurndown = "pump_below_turndown"  // the pump would run under a tenth of its output
 )
 
@@ -55,7 +56,7 @@ type Rates struct {
 	VolumePerSecond float64 // m3/s of product
 	HasPump         bool
 	PumpFraction    float64  // of the pump's output at 100 %, 0 to 1 (above 1 is refused)
-	Codes           []string // product_may_freeze, density_at_20c, pump_below_turndown
+	Codes           []string // the warning codes above that apply
 
 	DensitySource string   // where the density comes from; "" for solids and gases
 	Freezing      Freezing // where the product starts to freeze; see its Known

@@ -1,13 +1,16 @@
 package report
 
-import "beckline/dosing/caution"
+import (
+	"beckline/dosing"
+	"beckline/dosing/caution"
+)
 
 // CautionLines returns the short cautions of every product on the line, each
 // once, then what they must not meet, then who decides; empty where nothing is
 // dosed.
 func (d Document) CautionLines() []string {
-	keys := d.cautionKeys()
-	if len(keys) == 0 {
+	products := d.products()
+	if len(products) == 0 {
 		return nil
 	}
 	var lines []string
@@ -20,23 +23,23 @@ func (d Document) CautionLines() []string {
 			}
 		}
 	}
-	for _, key := range keys {
-		add(caution.For(key).Short...)
+	for _, p := range products {
+		add(caution.Of(p).Short...)
 	}
-	add(caution.Combined(keys)...)
+	add(caution.CombinedProducts(products)...)
 	add(caution.Deferral)
 	return lines
 }
 
-// cautionKeys are the sheets of what is dosed, each once, in order.
-func (d Document) cautionKeys() []string {
-	var keys []string
+// products are what is dosed, each sheet and strength once, in order.
+func (d Document) products() []dosing.Product {
+	var out []dosing.Product
 	seen := map[string]bool{}
 	for i := range d.result.Stations {
-		if a := d.result.Stations[i].Addition; a != nil && a.Product.Caution != "" && !seen[a.Product.Caution] {
-			seen[a.Product.Caution] = true
-			keys = append(keys, a.Product.Caution)
+		if a := d.result.Stations[i].Addition; a != nil && a.Product.Caution != "" && !seen[a.Product.Name] {
+			seen[a.Product.Name] = true
+			out = append(out, a.Product)
 		}
 	}
-	return keys
+	return out
 }

@@ -66,6 +66,7 @@ var sentences = map[string]func(w dosing.Warning) string{
 		return fmt.Sprintf("the finished water has little buffer (%s meq/L per pH): a small change of dose moves its pH far",
 			asFine.write(w.Value*milli))
 	},
+	"pump_near_limit": says("the pump would run above 90 % of its output: little is left to trim with, and a wrong reading may need more than it has"),
 	"pump_below_turndown": says("the pump would run under 10 % of its output, below a steady feed; " +
 		"dilute the product or use a smaller pump"),
 	"chlorine_constant_extrapolated": says("the constant of hypochlorous acid was measured from 5 to 35 C only; " +

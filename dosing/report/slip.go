@@ -20,7 +20,8 @@ var slipWaters = []string{"ph", "alkalinity_mg_l_caco3", "temperature_c", "dic_m
 
 // Slip returns the answer as a plain ASCII slip of at most 72 columns for
 // copying by hand or mouse. The lines down to the waters are always the same,
-// with "-" for what is not known; warnings and cautions follow.
+// with "-" for what is not known, and the steps in order where more is fed than
+// what was solved for; warnings and cautions follow.
 func (d Document) Slip() string {
 	var b strings.Builder
 	line := func(label, text string) {
@@ -36,6 +37,9 @@ func (d Document) Slip() string {
 			line("and", "")
 		}
 		slipDose(line, s)
+	}
+	for i, step := range d.steps() {
+		line(fmt.Sprintf("step %d", i+1), step)
 	}
 	line("target", orDash(d.targetWords()))
 	line("flow", flowText(d.result.Case.Readings.Flow))
@@ -117,6 +121,10 @@ func (d Document) LogLine(when time.Time) string {
 		parts[1] += " " + parts[2] + " +"
 		parts[1] += " " + other.Addition.Product.Name
 		parts[2] = find(Dose(other), "dose_mg_l").ShowUnit() + " pure"
+	}
+	if n := len(d.steps()) - len(d.result.Doses()); n > 0 {
+		// The dose alone would mislead whoever repeats it.
+		parts[1] = fmt.Sprintf("with %d more fed, %s", n, parts[1])
 	}
 	for _, leaveOut := range []int{4, 3} {
 		if len(strings.Join(parts, " ")) <= logWidth {

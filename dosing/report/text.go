@@ -151,17 +151,30 @@ func pumpCapacity(s *dosing.Station) string {
 // writeAdditions lists the steps where there is more than the solved one.
 func (d Document) writeAdditions(b *strings.Builder) {
 	var lines []string
+	for i, step := range d.steps() {
+		lines = append(lines, Wrap(fmt.Sprintf("  %d. %s", i+1, step), textWidth))
+	}
+	if len(lines) > 0 {
+		b.WriteString("Steps in order\n" + strings.Join(lines, "\n") + "\n\n")
+	}
+}
+
+// steps says each step of the line in order, nothing where there is no more
+// than what was solved for.
+func (d Document) steps() []string {
+	var lines []string
 	other := false
-	for i, step := range d.Stations {
+	for _, step := range d.Stations {
 		if step.Kind == "raw" {
 			continue
 		}
 		other = other || !step.Solved
-		lines = append(lines, Wrap(fmt.Sprintf("  %d. %s, then pH %s", i, stepText(step), find(step.Water, "ph").Show()), textWidth))
+		lines = append(lines, fmt.Sprintf("%s, then pH %s", stepText(step), find(step.Water, "ph").Show()))
 	}
-	if other {
-		b.WriteString("Steps in order\n" + strings.Join(lines, "\n") + "\n\n")
+	if !other {
+		return nil
 	}
+	return lines
 }
 
 // stepText names a step, a feed with its dose.
@@ -265,12 +278,11 @@ func checkLabel(name string) (label, unit string) {
 	return strings.ReplaceAll(name, "_", " "), ""
 }
 
-// difference writes how far two routes are apart, by its size alone.
+// difference writes how far two routes are apart, by its size alone. Rounding
+// differs from machine to machine, so a difference below any meaning is not told
+// from none.
 func difference(v float64) string {
-	switch v = math.Abs(v); {
-	case v == 0:
-		return "0"
-	case v < 1e-9:
+	if v = math.Abs(v); v < 1e-9 {
 		return "less than 1e-9"
 	}
 	return fmt.Sprintf("%.0e", v)

@@ -182,3 +182,29 @@ func TestBlendShowsWhatThePHIsNot(t *testing.T) {
 		t.Errorf("%s, %v", raw, err)
 	}
 }
+
+// What is fed ahead stands on the slip and in the log line: repeated without it,
+// the solved dose would be wrong.
+func TestSlipHoldsWhatIsFedAhead(t *testing.T) {
+	alum := named(t, "alum-dry")
+	r, err := dosing.Solve(dosing.Case{
+		Readings: soft(t),
+		Additions: []dosing.Addition{
+			{Product: alum, Dose: dosing.Some(12e-3 / alum.Chemical.MolarMass)},
+			{Product: named(t, "caustic-25"), Solve: true}},
+		Target: dosing.Target{Kind: dosing.TargetPH, Value: 8.3},
+	})
+	if err != nil {
+		t.Fatal(err)
+	}
+	d := New(r)
+	slip := strings.Join(strings.Fields(d.Slip()), " ")
+	for _, want := range []string{"step 1 alum-dry: 12.0 mg/L", "step 2 caustic-25 (solved)"} {
+		if !strings.Contains(slip, want) {
+			t.Errorf("the slip lacks %q:\n%s", want, d.Slip())
+		}
+	}
+	if line := d.LogLine(time.Unix(0, 0)); !strings.Contains(line, "with 1 more fed, caustic-25") || len(line) > logWidth {
+		t.Errorf("the log line is %q", line)
+	}
+}

@@ -3,6 +3,7 @@ package table
 import (
 	"fmt"
 	"maps"
+	"regexp"
 	"strings"
 
 	"beckline/dosing"
@@ -105,6 +106,9 @@ func (h *header) form(r *row, o Options) (entry.Form, *dosing.Problem) {
 		case f.Name == "" || text == "":
 		default:
 			number := h.plain(text)
+			if h.ambiguousPoint(text) {
+				return form, rowProblem(reading.CodeAmbiguousNumber, f.Name, text, "with decimal commas in this file: "+strings.ReplaceAll(text, ".", "")+" or "+strings.Replace(text, ".", ",", 1))
+			}
 			// The column's name gives the unit, so a unit in the cell could
 			// only contradict it.
 			if _, err := reading.Number(number); err != nil {
@@ -123,6 +127,14 @@ func (h *header) plain(text string) string {
 		return strings.Replace(text, ",", ".", 1)
 	}
 	return text
+}
+
+// aPointAndThree is one point with three digits behind it and one to three, not
+// starting with 0, before: in a file of decimal commas either of the two.
+var aPointAndThree = regexp.MustCompile(`^[1-9][0-9]{0,2}\.[0-9]{3}$`)
+
+func (h *header) ambiguousPoint(text string) bool {
+	return h.decimal == ',' && aPointAndThree.MatchString(text)
 }
 
 func unreadable(f reading.Field, text string, err error) *dosing.Problem {
