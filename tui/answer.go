@@ -35,6 +35,10 @@ func answer(s *dosing.Station, u units) setting {
 		return setting{heading: heading, number: x.Show(), unit: x.Unit, others: shown(others...)}
 	}
 	us := u != unitsSI
+	hourly := func(heading string, others ...string) setting {
+		number, unit, _ := strings.Cut(report.PerHour(f), " ")
+		return setting{heading: heading, number: number, unit: unit, others: shown(others...)}
+	}
 	given := func(key string) bool { return figure(f, key).Value.Given }
 	switch {
 	case given("pump_percent") && us:
@@ -42,7 +46,9 @@ func answer(s *dosing.Station, u units) setting {
 	case given("feed_gal_h") && us:
 		return of("SET THE PUMP TO", "feed_gal_h", "feed_ml_min", "feed_l_h", "feed_lb_d")
 	case given("feed_lb_d") && us:
-		return of("FEED", "feed_lb_d", "feed_kg_d")
+		a := of("FEED", "feed_lb_d", "feed_kg_d")
+		a.others = append(a.others, report.PerHour(f))
+		return a
 	case given("pump_percent"):
 		return of("SET THE PUMP TO", "pump_percent", "feed_l_h", "feed_ml_min", "feed_gal_h", "feed_kg_d")
 	case given("feed_l_h") && figure(f, "feed_l_h").Value.Value < 1:
@@ -50,7 +56,7 @@ func answer(s *dosing.Station, u units) setting {
 	case given("feed_l_h"):
 		return of("SET THE PUMP TO", "feed_l_h", "feed_ml_min", "feed_gal_h", "feed_kg_d", "feed_lb_d")
 	case given("feed_kg_d"):
-		return of("FEED", "feed_kg_d", "feed_lb_d")
+		return hourly("FEED", "feed_kg_d", "feed_lb_d")
 	}
 	return of("DOSE (no flow given)", "product_mg_l")
 }

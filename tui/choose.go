@@ -14,6 +14,7 @@ type list struct {
 	words []rune
 	at    int
 	pick  func(*Model, string)
+	back  state // where it was opened
 }
 
 // choice is one line of a list.
@@ -72,12 +73,12 @@ func (m *Model) accept() {
 		m.note = "nothing of that name: Backspace widens the search"
 		return
 	}
-	m.state = walking
+	m.state = m.list.back
 	m.list.pick(m, shown[m.list.at].name)
 }
 
 // closeList leaves the list without a choice.
-func (m *Model) closeList() { m.state = walking }
+func (m *Model) closeList() { m.state = m.list.back }
 
 // openList shows a list with the mark on the present choice.
 func (m *Model) openList(l list, present string) {
@@ -85,6 +86,9 @@ func (m *Model) openList(l list, present string) {
 		if c.name == present {
 			l.at = i
 		}
+	}
+	if ofWork(m.state) {
+		l.back = m.state
 	}
 	m.list, m.state = l, choosing
 }
@@ -101,25 +105,61 @@ func (m *Model) chooseProduct() {
 		}
 	}
 	p := st.places[0]
-	m.openList(list{title: "products", all: catalogue(), pick: func(m *Model, name string) {
+	all := m.catalogue()
+	if p.add >= 0 {
+		all = append(all, processes...)
+	}
+	m.openList(list{title: "products", all: all, pick: func(m *Model, name string) {
 		s := m.sheet.clone()
 		if s.text(p) != name {
-			s.set(p, name)
-			if p.add < 0 { // strength and temperature belong to the product before
-				delete(s.Values, "strength")
-				delete(s.Values, "product-temperature")
-			}
+			s.choose(p, name)
 		}
 		s.Untouched = false
 		m.change(s)
 	}}, m.sheet.text(p))
 }
 
-// catalogue lists every product with its title and what it is.
-func catalogue() []choice {
+// choose puts another product in a place. What belonged to the one before goes.
+func (s *sheet) choose(p place, name string) {
+	s.set(p, name)
+	if p.add >= 0 {
+		a := &s.Adds[p.add]
+		if isProcess(name) || !a.chlorinates() {
+			a.Residual, a.Demand = "", ""
+		}
+		if isProcess(name) {
+			a.Dose = ""
+		}
+		return
+	}
+	delete(s.Values, "strength")
+	delete(s.Values, "product-temperature")
+	delete(s.Limits, mostUse)
+	if s.plant != nil { // which knows the pump of each product; else the pump stays
+		delete(s.Values, "pump")
+		f := s.form()
+		s.plant.Choose(&f, name)
+		for _, setting := range []string{"strength", "product-temperature", "pump"} {
+			if text := f.Values[setting]; text != "" {
+				s.Values[setting] = text
+			}
+		}
+	}
+}
+
+// catalogue lists every product with its title and what it is, the plant's own
+// first.
+func (m *Model) catalogue() []choice {
 	var out []choice
+	if plant := m.sheet.plant; plant != nil {
+		for _, own := range plant.Site().Products {
+			out = append(out, choice{name: own.Name, detail: own.Title + ", this plant's own"})
+		}
+	}
 	for _, p := range dosing.Products() {
-		out = append(out, choice{name: p.Name, detail: p.Title + ", " + p.Chemical.Formula})
+		if m.sheet.plant == nil || m.sheet.plant.Site().ProductNamed(p.Name) == nil {
+			out = append(out, choice{name: p.Name, detail: p.Title + ", " + p.Chemical.Formula})
+		}
 	}
 	return out
 }

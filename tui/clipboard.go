@@ -42,10 +42,13 @@ func (m *Model) slip() (string, bool) {
 	}
 	text := report.New(m.good.result).Slip()
 	if m.sheet.Demo {
-		text = "DEMO PLANT, INVENTED READINGS\n" + text
+		text = demoHeading + text
 	}
 	return text, true
 }
+
+// demoHeading stands over a text of the demo plant.
+const demoHeading = "DEMO PLANT, INVENTED READINGS\n"
 
 // clipboardSequence wraps a text so that it reaches the outer terminal through
 // the multiplexers.

@@ -8,12 +8,16 @@
 //	walking.go   arrows, nudging, undo
 //	typing.go    what is typed into a field, and the question about unusual values
 //	choose.go    lists: products, targets, figures
-//	train.go     chemicals added, taken off, moved
+//	train.go     steps added, taken off, moved
 //	paste.go     one value or a whole row of readings
 //	page.go      help, sheets, the slip
+//	export.go    the answer in other forms, copied or written to a file
 //
-// What was entered is a sheet (sheet.go, with stations.go and units.go);
-// evaluate.go turns it into figures or into what is wrong. Model.View draws:
+// What was entered is a sheet (sheet.go, with stations.go, feedentry.go and
+// units.go); case.go makes a case of it, in a plant's own terms where a plant file
+// was given, and evaluate.go turns that into figures or into what is wrong:
+// trust.go says how far off they may be, limits.go which limits they pass.
+// Model.View draws:
 //
 //	draw.go, small.go      layout; a terminal that is too small
 //	line.go, answer.go     the stations; the setting, large

@@ -27,7 +27,11 @@ func (s *session) openDrafts(m *Model) {
 		}
 		s.offers = append(s.offers, offer{
 			said: fmt.Sprintf("%s, %d readings", when(saved.When.Local(), time.Now()), sh.readings()),
-			load: func() (sheet, error) { return sh.whole(), nil },
+			load: func() (sheet, error) {
+				sh = sh.whole()
+				sh.plant = s.options.Line
+				return sh, nil
+			},
 			done: func() {
 				saved.Remove()
 				s.offers = s.offers[1:]
@@ -41,6 +45,9 @@ func (s *session) openDrafts(m *Model) {
 func when(t, now time.Time) string {
 	if t.Format("20060102") == now.Format("20060102") {
 		return t.Format("15:04") + " today"
+	}
+	if t.Year() == now.Year() {
+		return t.Format("15:04 on 2 Jan")
 	}
 	return t.Format("15:04 on 2 Jan 2006")
 }

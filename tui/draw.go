@@ -46,6 +46,10 @@ func (m *Model) draw() *canvas.Canvas {
 		m.drawPage(c)
 		m.drawSafety(c)
 		m.drawKeys(c)
+	case ofWork(m.state):
+		m.drawWork(c)
+		m.drawSafety(c)
+		m.drawKeys(c)
 	default:
 		r := m.layout()
 		m.drawTitle(c)
@@ -68,10 +72,14 @@ func (m *Model) draw() *canvas.Canvas {
 // drawTitle says whose water this is.
 func (m *Model) drawTitle(c *canvas.Canvas) {
 	if m.sheet.Demo {
-		c.Text(1, 0, "DEMO PLANT: type a reading to start your own water", canvas.Good)
+		c.Text(1, 0, "DEMO PLANT: type a reading to start yours", canvas.Good)
 		return
 	}
-	c.Text(1, 0, "beckline", canvas.Plain)
+	name := "beckline"
+	if m.sheet.plant != nil {
+		name = m.sheet.plantName()
+	}
+	c.Text(1, 0, canvas.Cut(name, c.Width-2), canvas.Plain)
 	if m.sheet.Untouched {
 		c.Right(c.Width-1, 0, "product and target are the starting ones: check them (p, t)", canvas.Notice)
 	}

@@ -25,6 +25,8 @@ type evaluation struct {
 	refusal *dosing.Problem   // the readings are fine and there is no such dose
 	failure *dosing.Problem   // anything else that stands in the way
 	curve   curve
+	trust   trust
+	alarms  []alarm
 }
 
 // inspect looks at each place by itself: what cannot be used there, and what is
@@ -43,11 +45,11 @@ func inspect(s sheet) evaluation {
 func evaluate(s sheet, solve Solver) evaluation {
 	e := inspect(s)
 	for i, a := range s.Adds {
-		if strings.TrimSpace(a.Dose) == "" {
+		if a.missing() {
 			e.missing = append(e.missing, "dose-"+strconv.Itoa(i+1))
 		}
 	}
-	for _, p := range s.form().Problems(entry.NeedDose) {
+	for _, p := range s.problems() {
 		switch {
 		case p.Code == "missing":
 			e.missing = append(e.missing, p.Field)
@@ -80,36 +82,70 @@ func (e *evaluation) look(s sheet, p place) {
 	if p.kind != numberPlace || text == "" {
 		return
 	}
-	if p.add >= 0 {
+	switch {
+	case p.add >= 0:
 		e.lookDose(s, p, text)
+		return
+	case p.name == mostUse:
+		if _, err := useLevelOf(text); err != nil {
+			e.bad[p.name] = err.Error()
+		}
 		return
 	}
 	v, err := p.field.Parse(text)
-	switch {
-	case err != nil:
-		e.bad[p.name] = err.Error()
-	case v.Unusual && s.Accepted[p.name] != text:
+	if err != nil {
+		e.bad[p.name] = ownName(p, err).Error()
+		return
+	}
+	if s.plant != nil && isReading(p.name) {
+		warning, problem := s.plant.CheckReading(p.field, v.SI, v.Given)
+		if problem != nil {
+			e.bad[p.name] = report.ProblemLine(problem)
+			return
+		}
+		if _, own := s.plant.Usual[p.name]; own {
+			v.Unusual = warning != nil
+			if v.Unusual {
+				v.UnusualWhy = report.Sentence(*warning)
+			}
+		}
+	}
+	if v.Unusual && s.Accepted[p.name] != text && !isLimit(p.name) {
 		e.unsure[p.name] = v.UnusualWhy
 	}
 }
 
-// lookDose checks a dose that is given.
-func (e *evaluation) lookDose(s sheet, p place, text string) {
-	alone := entry.Form{Adds: []string{s.Adds[p.add].Product + "=" + text}}
-	for _, problem := range alone.Problems(entry.NeedWater) {
-		if problem.Field == reading.DoseField {
-			e.bad[p.name] = report.ProblemLine(problem)
-			return
-		}
+// ownName puts the place's own name into a refusal of its field.
+func ownName(p place, err error) error {
+	var e *reading.Error
+	if isLimit(p.name) && errors.As(err, &e) {
+		own := *e
+		own.Field = p.label
+		return &own
 	}
-	c, err := entry.Form{
-		Values: map[string]string{"ph": "7", "alkalinity": "50", "temperature": "10"}, Adds: alone.Adds,
-	}.Case(entry.NeedWater)
+	return err
+}
+
+// lookDose checks a number of a given step by itself.
+func (e *evaluation) lookDose(s sheet, p place, text string) {
+	a := feedEntry{Product: s.Adds[p.add].Product}
+	*a.number(p.part) = text
+	if p.part == demandPart {
+		a.Residual = "0"
+	}
+	alone := s
+	alone.Values, alone.Adds = map[string]string{"ph": "7", "alkalinity": "50", "temperature": "10"}, []feedEntry{a}
+	c, err := alone.caseFor(entry.NeedWater)
+	var problem *dosing.Problem
+	if errors.As(err, &problem) && problem.Field == reading.DoseField {
+		e.bad[p.name] = report.ProblemLine(problem)
+		return
+	}
 	if err != nil || s.Accepted[p.name] == text {
 		return
 	}
 	for _, note := range c.Notes {
-		if strings.HasPrefix(note.Code, "unusual_") {
+		if note.Code == "unusual_dose" {
 			e.unsure[p.name] = report.Sentence(note)
 		}
 	}
@@ -117,7 +153,7 @@ func (e *evaluation) lookDose(s sheet, p place, text string) {
 
 // answer solves the whole case.
 func (e *evaluation) answer(s sheet, solve Solver) {
-	c, err := s.form().Case(entry.NeedDose)
+	c, err := s.caseFor(entry.NeedDose)
 	if err != nil {
 		e.refuse(err)
 		return
@@ -131,12 +167,14 @@ func (e *evaluation) answer(s sheet, solve Solver) {
 		return
 	}
 	e.result, e.solved = r, true
-	e.curve = doseCurve(r, solve)
+	e.trust = trustOf(s, r)
+	e.curve = doseCurve(r, s.tolerances())
+	e.alarms = limitsPassed(s, r)
 }
 
 // waterOnly solves the raw water without any addition.
 func (e *evaluation) waterOnly(s sheet, solve Solver) {
-	c, err := s.form().Case(entry.NeedWater)
+	c, err := s.caseFor(entry.NeedWater)
 	if err != nil {
 		e.refuse(err)
 		return

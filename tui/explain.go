@@ -1,6 +1,7 @@
 package tui
 
 import (
+	"beckline/dosing"
 	"beckline/dosing/report"
 )
 
@@ -68,7 +69,7 @@ func (m *Model) showFigures() {
 		return
 	}
 	var figures []report.Figure
-	if s.Addition != nil && st.kind != finishedStation {
+	if s.Addition != nil && s.Addition.Process == dosing.ChemicalFeed && st.kind != finishedStation {
 		figures = append(figures, report.Dose(s)...)
 	}
 	figures = append(figures, report.Water(&s.Figures)...)

@@ -32,7 +32,15 @@ func TestScreens(t *testing.T) {
 		"slip":            func(d *driver) { d.own().keys("v") },
 		"warnings":        func(d *driver) { d.own().keys("w") },
 		"figures":         func(d *driver) { d.own().keys("f", "Down", "Down", "Down", "Down") },
-		"along-the-line":  func(d *driver) { d.own().keys("Down", "12", "Enter", "g") },
+		"alarm":           func(d *driver) { d.own().keys("Right", "End", "20", "Enter", "Right", "End", "Up", "8.2", "Enter") },
+		"worked-sheet":    func(d *driver) { d.own().keys("s") },
+		"three-steps": func(d *driver) {
+			d.hard().keys("a", "aeration", "Enter", "60", "Enter", "Right", "a", "chlorine-gas", "Enter", "Down", "0.5", "Enter", "1.2", "Enter")
+		},
+		"never-together": func(d *driver) {
+			d.own().keys("a", "alum-dry", "Enter", "20", "Enter", "a", "hypochlorite", "Enter", "1 mg/L Cl2", "Enter")
+		},
+		"along-the-line": func(d *driver) { d.own().keys("Down", "12", "Enter", "g") },
 	} {
 		for _, form := range []struct {
 			suffix        string

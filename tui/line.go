@@ -40,7 +40,7 @@ func (m *Model) drawLine(c *canvas.Canvas, top int) {
 	for i := range shown {
 		n := first + i
 		x := lineLabels + i*column
-		m.drawStation(c, x, top, column, n)
+		m.drawStation(c, x, top, column, n, first+shown == len(m.line))
 		if n == len(m.line)-1 {
 			break
 		}
@@ -53,8 +53,8 @@ func (m *Model) drawLine(c *canvas.Canvas, top int) {
 func more(n int) string { return string(rune('0'+min(n, 9))) + " more" }
 
 // drawStation shows one station: its name on the pipe, what is fed there and
-// the water after it.
-func (m *Model) drawStation(c *canvas.Canvas, x, top, width, n int) {
+// the water after it. last says that the finished water is in view.
+func (m *Model) drawStation(c *canvas.Canvas, x, top, width, n int, last bool) {
 	st := m.line[n]
 	name := canvas.Cut(st.title, width-3)
 	style := canvas.Plain
@@ -76,14 +76,25 @@ func (m *Model) drawStation(c *canvas.Canvas, x, top, width, n int) {
 	if s == nil {
 		return
 	}
-	if s.Addition != nil && st.kind != finishedStation {
+	switch {
+	case s.Addition == nil || st.kind == finishedStation:
+	case s.Addition.Process == dosing.ChemicalFeed:
 		c.Text(x, top+1, figure(report.Dose(s), "dose_mg_l").Show(), canvas.Plain)
+	case s.Addition.Process == dosing.Aeration:
+		c.Text(x, top+1, canvas.Cut(m.sheet.Adds[st.add].Dose, width-1), canvas.Plain)
+	}
+	if last && m.isFinishedWater(n) {
+		return
 	}
 	figures := report.Water(&s.Figures)
 	for i, f := range lineFigures {
 		c.Text(x, top+2+i, figure(figures, f.key).Show(), canvas.Plain)
 	}
 }
+
+// isFinishedWater tells whether what leaves a station is the finished water: it
+// stands in the last column, and not twice.
+func (m *Model) isFinishedWater(n int) bool { return n > 0 && n == len(m.line)-2 }
 
 // water is the station of the result that a station of the line shows, nil
 // where there is none.

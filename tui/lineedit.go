@@ -7,6 +7,7 @@ type lineEdit struct {
 	text  []rune
 	caret int
 	fresh bool // nothing has been typed since the edit was opened
+	most  int  // how many characters it takes; 0 is as many as a field
 }
 
 // longest is how much a field takes; more is not a value.
@@ -26,7 +27,7 @@ func (e *lineEdit) insert(r rune) {
 		e.text, e.caret = nil, 0
 	}
 	e.fresh = false
-	if r < ' ' || r == 0x7f || r == utf8.RuneError || len(e.text) >= longest {
+	if r < ' ' || r == 0x7f || r == utf8.RuneError || len(e.text) >= e.room() {
 		return
 	}
 	e.text = append(e.text, 0)
@@ -53,7 +54,14 @@ func (e *lineEdit) eraseHere() {
 }
 
 // clear removes everything.
-func (e *lineEdit) clear() { *e = lineEdit{} }
+func (e *lineEdit) clear() { *e = lineEdit{most: e.most} }
+
+func (e *lineEdit) room() int {
+	if e.most > 0 {
+		return e.most
+	}
+	return longest
+}
 
 // move shifts the caret.
 func (e *lineEdit) move(by int) {

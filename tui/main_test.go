@@ -24,7 +24,10 @@ func TestMain(m *testing.M) {
 // child runs the screen. A fault strikes once a reading has been typed, so that
 // the screen is up by then.
 func child(fault string) int {
-	o := Options{}
+	o := Options{Commands: fakeCommands()}
+	if state := os.Getenv("XDG_STATE_HOME"); state != "" {
+		_ = os.Chdir(state) // files that are asked for go there
+	}
 	struck := func(c dosing.Case) bool { return c.Readings.PH.Given && c.Readings.PH.Value == 6.66 }
 	switch fault {
 	case "solver":

@@ -57,6 +57,9 @@ func (m *Model) messages() []said {
 	default:
 		m.sayTrouble(say)
 	}
+	if _, ok := m.waitingDraft(); ok && m.sheet.Demo {
+		return out // what the demo plant warns of is less than a draft on offer
+	}
 	if m.good.result != nil && len(out) < messageRows {
 		m.sayWarnings(say)
 	}
@@ -95,39 +98,50 @@ func (m *Model) sayTrouble(say func(canvas.Style, string)) {
 		say(canvas.Notice, "STILL NEEDED: "+strings.Join(names, ", "))
 	}
 	if o, ok := m.waitingDraft(); ok {
-		say(canvas.Good, "d takes up the draft of "+o.said)
+		say(canvas.Plain, "d takes up the draft of "+o.said)
 	}
 }
 
-// sayWarnings tells the first warning, and how many there are.
+// sayWarnings tells the first alarm, or else the first warning, and how many
+// more there are.
 func (m *Model) sayWarnings(say func(canvas.Style, string)) {
-	warnings := m.good.result.Warnings
-	if len(warnings) == 0 {
+	alarmed, warned := m.good.alarms, m.good.warnings()
+	if len(alarmed)+len(warned) == 0 {
 		return
 	}
-	first := warnings[0]
-	for _, w := range warnings {
-		if alarms[w.Code] {
-			first = w
-			break
-		}
+	word, first, style := "Warning", "", canvas.Notice
+	if len(alarmed) > 0 {
+		word, first, style = "ALARM", alarmed[0].text, canvas.Alarm
+	} else {
+		first = warned[0]
 	}
-	text, style := "Warning: ", canvas.Notice
-	if alarms[first.Code] {
-		text, style = "ALARM: ", canvas.Alarm
+	if m.sheet.Demo && len(alarmed) == 0 { // of no water of theirs: a slow line is spared
+		say(style, plural(len(warned), "warning")+": w")
+		return
 	}
-	if n := len(warnings); n > 1 {
-		text = strings.TrimSuffix(text, ": ") + " 1 of " + strconv.Itoa(n) + " (w): "
+	if n := len(alarmed) + len(warned); n > 1 {
+		word += " 1 of " + strconv.Itoa(n) + " (w)"
 	}
-	text += report.Sentence(first)
-	if short := canvas.Cut(text, m.width-6); short != text && !m.look.linear {
+	text := word + ": " + first
+	if short := canvas.Cut(text, m.width-6); short != text && !m.look.linear && len(alarmed) == 0 {
 		text = short + " (w)" // one row; the key shows the rest
 	}
 	say(style, text)
 }
 
-// alarms are the warnings that come first.
-var alarms = map[string]bool{"over_use_level": true, "may_scale": true, "product_may_freeze": true}
+// warnings are the sentences of the warnings that are no alarms.
+func (e *evaluation) warnings() []string {
+	if e.result == nil {
+		return nil
+	}
+	var out []string
+	for _, w := range e.result.Warnings {
+		if !alarms[w.Code] {
+			out = append(out, report.Sentence(w))
+		}
+	}
+	return out
+}
 
 // pasteQuestion shows what would be entered.
 func (m *Model) pasteQuestion() string {
@@ -145,15 +159,32 @@ func (m *Model) pasteQuestion() string {
 	return "Pasted: " + strings.Join(parts, ", ") + ". Enter enters them, Esc drops them."
 }
 
-// showWarnings opens a page with all warnings.
+// showWarnings opens a page with all alarms and warnings, and the trust.
 func (m *Model) showWarnings() {
-	if m.good.result == nil || len(m.good.result.Warnings) == 0 {
-		m.note = "no warnings"
+	if m.good.result == nil {
+		m.note = "no figures yet"
 		return
 	}
 	var b strings.Builder
-	for _, w := range m.good.result.Warnings {
-		b.WriteString(sentence(report.Sentence(w)) + "\n\n")
+	for _, a := range m.good.alarms {
+		b.WriteString("ALARM: " + a.text + ".\n\n")
+	}
+	for _, text := range m.good.warnings() {
+		b.WriteString(sentence(text) + "\n\n")
+	}
+	if b.Len() == 0 {
+		b.WriteString("No alarms and no warnings.\n\n")
+	}
+	if text := m.good.trust.whole(); text != "" {
+		b.WriteString("How far to trust it: " + text + ". " + trustMeans + "\n")
 	}
 	m.openPage(page{title: "warnings", text: b.String()})
+}
+
+// plural counts things.
+func plural(n int, of string) string {
+	if n != 1 {
+		of += "s"
+	}
+	return strconv.Itoa(n) + " " + of
 }

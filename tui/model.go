@@ -13,16 +13,19 @@ import (
 type state int
 
 const (
-	walking  state = iota // arrows move, letters are commands
-	typing                // printable keys go to the field
-	choosing              // printable keys search a list
-	paging                // a page covers the middle of the screen
-	pasting               // several pasted values wait for a yes
+	walking   state = iota // arrows move, letters are commands
+	typing                 // printable keys go to the field
+	choosing               // printable keys search a list
+	paging                 // a page covers the middle of the screen
+	pasting                // several pasted values wait for a yes
+	filling                // a command's form: arrows move, letters are commands
+	entering               // printable keys go to a field of the form
+	answering              // the answer of a form
 	states
 )
 
 // stateNames stand at the start of the bottom line.
-var stateNames = [states]string{"walking", "typing", "searching", "reading", "pasting"}
+var stateNames = [states]string{"walking", "typing", "searching", "reading", "pasting", "form", "entering", "answer"}
 
 // pause is how long after the last key the figures follow. A 1 on the way to
 // 121 is not a reading, and alarms must not flash on it.
@@ -62,6 +65,7 @@ type Model struct {
 	list  list
 	page  page
 	panel panel
+	work  work
 	paste []pasted
 
 	profile bool // the second view: figures along the line in place of the curve
@@ -101,6 +105,8 @@ func (m *Model) Update(msg tea.Msg) (tea.Model, tea.Cmd) {
 		m.width, m.height = max(msg.Width, 1), max(msg.Height, 1)
 	case tea.KeyMsg:
 		return m, m.key(msg)
+	case workDone:
+		m.worked(msg)
 	case pausedMsg:
 		m.follow(msg.seq)
 	case resumedMsg:
@@ -172,6 +178,10 @@ func (m *Model) press(key string) tea.Cmd {
 		m.typeRune(r[0])
 	case choosing:
 		m.list.search(r[0])
+	case filling:
+		m.startEntry(r[0])
+	case entering:
+		m.edit.insert(r[0])
 	}
 	return nil
 }

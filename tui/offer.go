@@ -10,7 +10,8 @@ type offer struct {
 // waitingDraft is the newest draft on offer, while nothing of one's own has
 // been entered.
 func (m *Model) waitingDraft() (offer, bool) {
-	if !m.sheet.Demo || m.hooks.drafts == nil {
+	untouched := m.sheet.Demo || m.sheet.plant != nil && len(m.history.past) == 0
+	if !untouched || m.hooks.drafts == nil {
 		return offer{}, false
 	}
 	all := m.hooks.drafts()

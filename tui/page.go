@@ -10,11 +10,17 @@ type page struct {
 	text  string
 	plain bool // lines are shown as they are, to be selected with the mouse
 	top   int
+	back  state // where it was opened
 }
 
-func (m *Model) openPage(p page) { m.page, m.state = p, paging }
+func (m *Model) openPage(p page) {
+	if ofWork(m.state) {
+		p.back = m.state
+	}
+	m.page, m.state = p, paging
+}
 
-func (m *Model) closePage() { m.state = walking }
+func (m *Model) closePage() { m.state = m.page.back }
 
 // pageLines are the lines of the page at the present width.
 func (m *Model) pageLines() []string {

@@ -24,6 +24,10 @@ func (m *Model) pasteText(text string) {
 		}
 		return
 	}
+	if ofWork(m.state) {
+		m.pasteEntry(text)
+		return
+	}
 	if m.state != walking && m.state != typing {
 		return
 	}

@@ -38,20 +38,26 @@ type terminal struct {
 // start opens the screen in a terminal of 80 × 24 that answers no query.
 func start(t *testing.T, fault string, env ...string) *terminal {
 	t.Helper()
+	return launch(t, 80, 24, exec.Command(os.Args[0]), append([]string{childVariable + "=" + fault}, env...))
+}
+
+// launch runs a command in a terminal of a size.
+func launch(t *testing.T, columns, rows int, cmd *exec.Cmd, env []string) *terminal {
+	t.Helper()
 	ours, theirs, err := pty.Open()
 	if err != nil {
 		t.Skip("no pseudo-terminal here: ", err)
 	}
-	if err := pty.Setsize(ours, &pty.Winsize{Rows: 24, Cols: 80}); err != nil {
+	if err := pty.Setsize(ours, &pty.Winsize{Rows: uint16(rows), Cols: uint16(columns)}); err != nil {
 		t.Fatal(err)
 	}
-	p := &terminal{t: t, tty: ours, other: theirs, screen: vt.New(80, 24), news: make(chan struct{}, 1)}
+	p := &terminal{t: t, tty: ours, other: theirs, screen: vt.New(columns, rows), news: make(chan struct{}, 1)}
 	p.found = p.settings()
-	p.cmd = exec.Command(os.Args[0])
+	p.cmd = cmd
 	p.cmd.Stdin, p.cmd.Stdout, p.cmd.Stderr = theirs, theirs, &p.errs
 	p.cmd.SysProcAttr = &syscall.SysProcAttr{Setsid: true, Setctty: true}
 	p.cmd.Env = append([]string{"TERM=xterm", "LANG=C.UTF-8", "XDG_STATE_HOME=" + t.TempDir(), "GOCOVERDIR=" + t.TempDir(),
-		"HOME=" + t.TempDir(), childVariable + "=" + fault}, env...)
+		"HOME=" + t.TempDir(), "PATH=" + os.Getenv("PATH")}, env...)
 	if err := p.cmd.Start(); err != nil {
 		t.Fatal(err)
 	}

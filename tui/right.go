@@ -19,5 +19,6 @@ func (m *Model) drawRight(c *canvas.Canvas, top, end int) {
 	}
 	c.Text(x, top, canvas.Cut(m.good.curve.steepness(), c.Width-x-1), canvas.Plain)
 	width := min(c.Width-x-1, curveWidth+(c.Width-leastWidth)/2)
-	m.good.curve.draw(c, x, top+1, width, min(end-top-2, 7+(c.Height-leastHeight)/2), m.look.glyphs == fullGlyphs)
+	m.good.curve.draw(c, x, top+1, width, min(end-top-3, 6+(c.Height-leastHeight)/2), m.look.glyphs == fullGlyphs)
+	m.drawTrust(c, x, end-2)
 }

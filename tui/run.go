@@ -13,6 +13,7 @@ import (
 
 	"beckline/dosing"
 	"beckline/dosing/entry"
+	"beckline/dosing/site"
 	"beckline/tui/console"
 	"beckline/tui/draft"
 	"beckline/tui/painter"
@@ -23,12 +24,15 @@ import (
 type Options struct {
 	In, Out *os.File // the terminal; default standard input and output
 	Err     io.Writer
-	Form    *entry.Form // readings to start with; nil: the demo plant
+	Form    *entry.Form // readings to start with; nil: the line's, or the demo plant
+	Line    *site.Line  // line of a plant file: its products, pump, limits, tolerances; nil without
 	Solve   Solver      // default dosing.Solve
-	Env     func(string) string
-	Linear  bool   // lines of text in order and no boxes, for a screen reader
-	ASCII   bool   // plain characters only
-	Drafts  string // folder of the drafts; default by XDG, "none": keep none
+	// Commands are offered as forms, beside the line; none without.
+	Commands []Command
+	Env      func(string) string
+	Linear   bool   // lines of text in order and no boxes, for a screen reader
+	ASCII    bool   // plain characters only
+	Drafts   string // folder of the drafts; default by XDG, "none": keep none
 }
 
 // Exit codes of the screen beside 0 and 128 + the number of a signal.
@@ -141,10 +145,15 @@ func (s *session) loop() (err error) {
 // model makes the model and ties it to the terminal.
 func (s *session) model(l look) *Model {
 	sheet := newSheet(entry.Demo(), true)
+	if s.options.Line != nil {
+		sheet = newPlantSheet(s.options.Line)
+	}
 	if s.options.Form != nil {
 		sheet = newSheet(*s.options.Form, false)
+		sheet.plant = s.options.Line
 	}
 	m := newModel(sheet, s.options.Solve, l)
+	m.work.commands = s.options.Commands
 	m.width, m.height = s.term.Size()
 	m.hooks = hooks{
 		frame:   s.paint.Show,

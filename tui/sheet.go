@@ -6,6 +6,7 @@ import (
 
 	"beckline/dosing/entry"
 	"beckline/dosing/reading"
+	"beckline/dosing/site"
 )
 
 // sheet is everything that a person has entered, as typed. It is what undo
@@ -18,18 +19,14 @@ type sheet struct {
 	// Accepted holds unusual values that the person has confirmed, by field.
 	Accepted map[string]string `json:"accepted,omitempty"`
 	Units    units             `json:"units,omitempty"`
+	Limits   map[string]string `json:"limits,omitempty"` // of the plant, by the names in limits.go, as typed
 	// Demo says that the readings are those of the demo plant.
 	Demo bool `json:"demo,omitempty"`
 	// Untouched says that target and product are the ones the screen started
 	// with: nobody has chosen them yet.
 	Untouched bool `json:"untouched,omitempty"`
-}
 
-// feedEntry is one chemical fed at a dose that is given, ahead of the one that
-// is solved for.
-type feedEntry struct {
-	Product string `json:"product"`
-	Dose    string `json:"dose"` // as typed
+	plant *site.Line // the line of a plant file that the screen was opened with; nil without
 }
 
 // targets are the kinds of target in the order in which the screen offers them.
@@ -37,7 +34,8 @@ var targets = []string{"target-ph", "target-alkalinity", "target-si", "target-cc
 
 // newSheet makes a sheet of a form. demo says that its readings are invented.
 func newSheet(f entry.Form, demo bool) sheet {
-	s := sheet{Values: map[string]string{}, Product: f.Product, Target: targets[0], Accepted: map[string]string{}, Demo: demo, Untouched: demo}
+	s := sheet{Values: map[string]string{}, Product: f.Product, Target: targets[0], Accepted: map[string]string{},
+		Limits: map[string]string{}, Demo: demo, Untouched: demo}
 	for name, text := range f.Values {
 		if text != "" {
 			s.Values[name] = text
@@ -49,19 +47,12 @@ func newSheet(f entry.Form, demo bool) sheet {
 		}
 	}
 	for _, add := range f.Adds {
-		s.Adds = append(s.Adds, splitAdd(add))
+		s.Adds = append(s.Adds, splitAdd(add, false))
+	}
+	for _, add := range f.Thens {
+		s.Adds = append(s.Adds, splitAdd(add, true))
 	}
 	return s
-}
-
-// splitAdd takes "PRODUCT=DOSE" apart.
-func splitAdd(add string) feedEntry {
-	for i, r := range add {
-		if r == '=' {
-			return feedEntry{Product: add[:i], Dose: add[i+1:]}
-		}
-	}
-	return feedEntry{Product: add}
 }
 
 // form is the sheet as the commands would be given it.
@@ -74,7 +65,11 @@ func (s sheet) form() entry.Form {
 		f.Values[name] = text
 	}
 	for _, a := range s.Adds {
-		f.Adds = append(f.Adds, a.Product+"="+a.Dose)
+		if a.Behind {
+			f.Thens = append(f.Thens, a.text())
+		} else {
+			f.Adds = append(f.Adds, a.text())
+		}
 	}
 	return f
 }
@@ -83,6 +78,7 @@ func (s sheet) form() entry.Form {
 func (s sheet) clone() sheet {
 	s.Values = maps.Clone(s.Values)
 	s.Accepted = maps.Clone(s.Accepted)
+	s.Limits = maps.Clone(s.Limits)
 	s.Adds = slices.Clone(s.Adds)
 	return s
 }
@@ -90,7 +86,8 @@ func (s sheet) clone() sheet {
 // equal reports whether nothing was changed.
 func (s sheet) equal(t sheet) bool {
 	return maps.Equal(s.Values, t.Values) && s.Product == t.Product && s.Target == t.Target &&
-		slices.Equal(s.Adds, t.Adds) && s.Units == t.Units && maps.Equal(s.Accepted, t.Accepted) && s.Demo == t.Demo && s.Untouched == t.Untouched
+		slices.Equal(s.Adds, t.Adds) && s.Units == t.Units && maps.Equal(s.Accepted, t.Accepted) &&
+		maps.Equal(s.Limits, t.Limits) && s.Demo == t.Demo && s.Untouched == t.Untouched
 }
 
 // own is the sheet with which a plant's own readings start: every number of
@@ -98,7 +95,8 @@ func (s sheet) equal(t sheet) bool {
 // target stay as starting settings, and the screen says that nobody has chosen
 // them until somebody does.
 func (s sheet) own() sheet {
-	n := sheet{Values: map[string]string{}, Product: s.Product, Target: s.Target, Accepted: map[string]string{}, Units: s.Units, Untouched: s.Untouched}
+	n := sheet{Values: map[string]string{}, Product: s.Product, Target: s.Target, Accepted: map[string]string{},
+		Limits: maps.Clone(s.Limits), Units: s.Units, Untouched: s.Untouched, plant: s.plant}
 	if text := s.Values[s.Target]; text != "" {
 		n.Values[s.Target] = text
 	}
@@ -120,6 +118,10 @@ func (s sheet) whole() sheet {
 	if s.Accepted == nil {
 		s.Accepted = map[string]string{}
 	}
+	if s.Limits == nil {
+		s.Limits = map[string]string{}
+	}
+	slices.SortStableFunc(s.Adds, func(a, b feedEntry) int { return a.side() - b.side() })
 	if _, known := unitNames[s.Units]; !known {
 		s.Units = unitsSI
 	}

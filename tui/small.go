@@ -44,7 +44,11 @@ func (m *Model) drawSmall(c *canvas.Canvas) {
 	if m.state == typing {
 		text = m.edit.String()
 	}
-	put(stateNames[m.state]+" "+p.label+": "+text, canvas.Strong)
+	where := stateNames[m.state] + " " + p.label + ": " + text
+	if m.openForm() != nil {
+		where = m.smallWork()
+	}
+	put(where, canvas.Strong)
 	put(fmt.Sprintf("The screen needs %d x %d, this is %d x %d. Ctrl-C leaves.", leastWidth, leastHeight, c.Width, c.Height), canvas.Plain)
 	for _, line := range append(slices.Clone(m.shortCautions()), caution.Deferral) {
 		put(line, canvas.Plain)

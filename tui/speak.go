@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"strings"
 
+	"beckline/dosing"
 	"beckline/dosing/caution"
 	"beckline/dosing/report"
 	"beckline/tui/canvas"
@@ -32,6 +33,8 @@ func (m *Model) speak() painter.Lines {
 		} else {
 			l.Statements = []string{"Nothing of that name."}
 		}
+	case filling, entering, answering:
+		l = m.speakWork()
 	default:
 		l = painter.Lines{Section: "line", Statements: m.sayLine(), Prompt: m.sayPlace()}
 	}
@@ -69,30 +72,38 @@ func (m *Model) sayPlace() string {
 	return m.station().title + ", " + p.label + ": " + text + unit + " "
 }
 
-// sayLine says whose water it is, the answer, the water at each station, what
+// sayLine says the answer, whose water it is, the water at each station, what
 // there is to say, and the cautions.
 func (m *Model) sayLine() []string {
 	var out []string
 	if m.sheet.Demo {
-		out = append(out, "Demo plant, not your water: type a reading to start yours. Question mark is help, Ctrl-C leaves.")
-	} else if m.sheet.Untouched {
+		out = append(out, "Demo plant: "+m.sayAnswer(), "That is not your water: type a reading to start yours. Question mark is help, Ctrl-C leaves.")
+	} else {
+		out = append(out, m.sayAnswer())
+	}
+	if m.sheet.Untouched && !m.sheet.Demo {
 		out = append(out, "Product and target are the starting ones: check them with p and t.")
 	}
-	out = append(out, m.sayAnswer())
-	for _, st := range m.line {
+	for n, st := range m.line {
 		if s := m.water(st); s != nil {
 			var parts []string
-			if s.Addition != nil && st.kind != finishedStation {
+			if s.Addition != nil && s.Addition.Process == dosing.ChemicalFeed && st.kind != finishedStation {
 				parts = append(parts, "dose "+figure(report.Dose(s), "dose_mg_l").ShowUnit())
 			}
 			figures := report.Water(&s.Figures)
 			for _, f := range lineFigures {
-				if x := figure(figures, f.key); x.Value.Given {
+				if x := figure(figures, f.key); x.Value.Given && !m.isFinishedWater(n) {
 					parts = append(parts, x.Label+" "+x.ShowUnit())
 				}
 			}
+			if len(parts) == 0 {
+				continue
+			}
 			out = append(out, st.title+": "+strings.Join(parts, ", ")+".")
 		}
+	}
+	if text := m.good.trust.whole(); text != "" && !m.old {
+		out = append(out, "Trust: "+text+".")
 	}
 	for _, s := range m.messages() {
 		out = append(out, s.text)

@@ -3,28 +3,47 @@ package tui
 import (
 	"slices"
 	"strconv"
+	"strings"
 
 	"beckline/dosing/reading"
 )
 
-// addStation asks for a product and puts it on the line after the station
-// walked to, ahead of the chemical that is solved for.
-func (m *Model) addStation() {
-	at := len(m.sheet.Adds)
-	switch st := m.station(); st.kind {
-	case rawStation:
-		at = 0
-	case fixedStation:
-		at = st.add + 1
+// addStation asks what is done after the station walked to, or before it, and
+// puts that on the line.
+func (m *Model) addStation(before bool) {
+	at, behind, where := 0, false, "after "+m.station().title
+	st := m.station()
+	if before {
+		where = "before " + st.title
 	}
-	m.openList(list{title: "feed ahead", all: catalogue(), pick: func(m *Model, name string) {
+	switch st.kind {
+	case rawStation:
+		where = "after raw water" // nothing comes before it
+	case fixedStation:
+		behind = m.sheet.Adds[st.add].Behind
+		if at = st.add; !before {
+			at++
+		}
+	case solvedStation:
+		at, behind = m.sheet.ahead(), !before
+	case finishedStation:
+		at, behind, where = len(m.sheet.Adds), true, "before the finished water"
+	}
+	m.openList(list{title: "feed " + where, all: append(m.catalogue(), processes...), pick: func(m *Model, name string) {
 		s := m.sheet.clone()
-		s.Adds = slices.Insert(s.Adds, at, feedEntry{Product: name})
+		s.Adds = slices.Insert(s.Adds, at, feedEntry{Product: name, Behind: behind})
 		m.change(s)
-		m.row = slices.Insert(m.row, at+1, 1)
-		m.top = slices.Insert(m.top, at+1, 0)
+		place := at + 1 // the raw water stands before them
+		if behind {
+			place++ // and the solved one
+		}
+		m.row = slices.Insert(m.row, place, 1)
+		m.top = slices.Insert(m.top, place, 0)
 		m.relay()
-		m.at = at + 1 // the raw water stands before them
+		m.at = place
+		if name == contactor {
+			m.note = "a contactor takes no dose; x takes it off, [ and ] move it"
+		}
 	}}, "")
 }
 
@@ -32,7 +51,7 @@ func (m *Model) addStation() {
 func (m *Model) removeStation() {
 	st := m.station()
 	if st.kind != fixedStation {
-		m.note = "only a chemical fed at a given dose can be taken off; p changes the product"
+		m.note = "only a step that is given can be taken off; p changes the product"
 		return
 	}
 	s := m.sheet.clone()
@@ -41,25 +60,36 @@ func (m *Model) removeStation() {
 	m.note = st.title + " taken off the line; u brings it back"
 }
 
-// moveStation moves the station walked to along the line.
+// moveStation moves the station walked to along the line; the others keep their
+// order.
 func (m *Model) moveStation(by int) {
 	st := m.station()
-	to := st.add + by
-	if st.kind != fixedStation || to < 0 || to >= len(m.sheet.Adds) {
+	ahead := m.sheet.ahead()
+	s := m.sheet.clone()
+	switch {
+	case st.kind == solvedStation && by < 0 && ahead > 0:
+		s.Adds[ahead-1].Behind = true
+	case st.kind == solvedStation && by > 0 && ahead < len(s.Adds):
+		s.Adds[ahead].Behind = false
+	case st.kind == fixedStation && by > 0 && st.add == ahead-1:
+		s.Adds[st.add].Behind = true
+	case st.kind == fixedStation && by < 0 && st.add == ahead:
+		s.Adds[st.add].Behind = false
+	case st.kind == fixedStation && st.add+by >= 0 && st.add+by < len(s.Adds):
+		s.Adds[st.add], s.Adds[st.add+by] = s.Adds[st.add+by], s.Adds[st.add]
+	default:
 		m.note = "it cannot go there"
 		return
 	}
-	s := m.sheet.clone()
-	s.Adds[st.add], s.Adds[to] = s.Adds[to], s.Adds[st.add]
 	m.change(s)
 	m.at += by
 }
 
 // nudgeDose moves a given dose by a step that suits its size.
 func (m *Model) nudgeDose(p place, steps int) {
-	d, err := reading.ParseDose(m.sheet.Adds[p.add].Product + "=" + m.sheet.text(p))
+	d, err := reading.ParseDose("x=" + strings.TrimSuffix(m.sheet.text(p), "%"))
 	if err != nil {
-		m.note = "type a dose first"
+		m.note = "type a number first"
 		return
 	}
 	step := 1.0

@@ -29,7 +29,7 @@ func TestCoagulantAhead(t *testing.T) {
 	if got := d.m.sheet.Adds[0].Product; got != "hypochlorite-12" {
 		t.Errorf("first is %s after moving", got)
 	}
-	d.keys("u", "u", "u", "x").shows("only a chemical")
+	d.keys("u", "u", "u", "x").shows("only a step that is given")
 	d.keys("Right", "x").hides("alum-dry ▶")
 	if d.solved() != plain {
 		t.Errorf("dose %v after taking alum off, %v before it", d.solved(), plain)

@@ -124,7 +124,7 @@ func TestNegativeNumberStartsWithEnter(t *testing.T) {
 	if got := d.m.sheet.Values["target-si"]; got != "-0.3" {
 		t.Errorf("target %q", got)
 	}
-	d.keys("Enter", "-0.4", "Enter") // over what is there
+	d.keys("Up", "Enter", "-0.4", "Enter") // over what is there
 	if got := d.m.sheet.Values["target-si"]; got != "-0.4" {
 		t.Errorf("target %q", got)
 	}

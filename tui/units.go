@@ -44,7 +44,7 @@ func (u units) of(f reading.Field) string {
 
 // label is the unit as it stands beside a value.
 func (u units) label(p place) string {
-	if name, ok := otherUnits[u][p.field.Name]; ok && p.kind == numberPlace && p.add < 0 {
+	if name, ok := otherUnits[u][p.field.Name]; ok && p.kind == numberPlace && !p.plainText() {
 		return shortUnit(name)
 	}
 	return shortUnit(p.unit)
@@ -53,7 +53,7 @@ func (u units) label(p place) string {
 // complete writes the unit behind a bare number where the habit's is not the
 // one that a bare number has.
 func (u units) complete(p place, text string) string {
-	if p.kind != numberPlace || p.add >= 0 || text == "" || hasUnit(text) {
+	if p.kind != numberPlace || p.plainText() || text == "" || hasUnit(text) {
 		return text
 	}
 	if name, ok := otherUnits[u][p.field.Name]; ok {
@@ -67,7 +67,7 @@ func (u units) complete(p place, text string) string {
 // cannot be read; it is then shown as typed.
 func (s sheet) shown(p place) (text string, ok bool) {
 	text = s.text(p)
-	if p.kind != numberPlace || p.add >= 0 || text == "" {
+	if p.kind != numberPlace || p.plainText() || text == "" {
 		return text, text != "" && !hasUnit(text)
 	}
 	v, err := p.field.Parse(text)
@@ -83,6 +83,10 @@ func (s sheet) shown(p place) (text string, ok bool) {
 	}
 	return text, false
 }
+
+// plainText tells whether a place's number has no field, so that only its own
+// unit is known.
+func (p place) plainText() bool { return p.add >= 0 || p.name == mostUse }
 
 // numberPart is a typed value without its unit.
 func numberPart(text string) string {
@@ -108,7 +112,7 @@ func shortUnit(unit string) string {
 // is plain.
 func (s sheet) understood(p place) string {
 	text := s.text(p)
-	if p.kind != numberPlace || p.add >= 0 || !hasUnit(text) {
+	if p.kind != numberPlace || p.plainText() || !hasUnit(text) {
 		return ""
 	}
 	shown, ok := s.shown(p)

@@ -46,12 +46,25 @@ func (m *Model) open() {
 }
 
 // startWith starts typing with the character that was pressed, where it can
-// start a number.
+// start a number. Where a name or a kind stands, the number goes to the value
+// that belongs to it. Any other character is answered: silence would leave a
+// person guessing.
 func (m *Model) startWith(r rune) {
-	if (r >= '0' && r <= '9' || r == '.' || r == ',') && m.place().kind == numberPlace {
-		m.startTyping("")
-		m.typeRune(r)
+	if !(r >= '0' && r <= '9' || r == '.' || r == ',') {
+		if r > ' ' && r < 0x7f {
+			m.note = string(r) + " does nothing here; ? lists the keys, Ctrl-C leaves"
+		}
+		return
 	}
+	if p := m.place(); p.kind == targetPlace || p.kind == productPlace && p.add >= 0 && len(m.station().places) > 1 {
+		m.row[m.at] = 1
+	}
+	if m.place().kind != numberPlace {
+		m.note = "no number goes here: p lists the products, the arrows walk to a field"
+		return
+	}
+	m.startTyping("")
+	m.typeRune(r)
 }
 
 // nudge moves the value by the reading's own step. A value that becomes
@@ -65,7 +78,7 @@ func (m *Model) nudge(steps int) {
 	if p.kind != numberPlace {
 		return
 	}
-	if p.add >= 0 {
+	if p.plainText() {
 		m.nudgeDose(p, steps)
 		return
 	}

@@ -103,6 +103,7 @@ func writeFlags(b *bytes.Buffer, cmd *cobra.Command, group reading.Group, title 
 // arrayUnits says what a flag holds that is repeated, where not product=dose.
 var arrayUnits = map[string]string{
 	"source": "water", "price": "product=price", "limit": "figure=range", "use-level": "product=mg/L", "pump-of": "product=L/h",
+	"draw": "volume and time", "point": "dose=pH",
 }
 
 // flagLine is one flag: its name and unit, and what it is, broken to the width.

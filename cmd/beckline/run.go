@@ -13,6 +13,7 @@ import (
 	"beckline/dosing"
 	"beckline/dosing/report"
 	"beckline/dosing/table"
+	"beckline/tui"
 )
 
 // Exit codes.
@@ -30,24 +31,37 @@ type console struct {
 	in       io.Reader
 	out      *bytes.Buffer
 	direct   io.Writer
-	notes    []string  // lines for stderr at exit 0
-	terminal bool      // both ends are a terminal
-	progress io.Writer // where a long run says how far it is; nil where nobody watches
-	code     int       // exit code of the screen
+	notes    []string    // lines for stderr at exit 0
+	terminal bool        // both ends are a terminal
+	progress io.Writer   // where a long run says how far it is; nil where nobody watches
+	code     int         // exit code of the screen
+	gives    []tui.Given // readings that the answer found, for the screen to take over
 }
 
 // run is one run of the program: arguments without the program's name. It
 // returns the exit code. Whatever is not exit 0 leaves stdout empty and one
 // line, or with --json one object, on stderr.
 func run(args []string, stdin io.Reader, stdout, stderr io.Writer) (code int) {
-	asJSON := wantsJSON(args)
+	c, err := perform(args, stdin, stdout, stderr)
+	if err != nil {
+		return refuse(stderr, wantsJSON(args), err)
+	}
+	for _, note := range c.notes {
+		fmt.Fprintln(stderr, note)
+	}
+	return c.code
+}
+
+// perform runs the program without a word about what it refuses, which is the
+// error; a fault of the program is one too.
+func perform(args []string, stdin io.Reader, stdout, stderr io.Writer) (c *console, err error) {
 	defer func() {
 		if r := recover(); r != nil {
-			code = refuse(stderr, asJSON, &dosing.Problem{Kind: dosing.Failed, Code: "failed",
-				Given: fmt.Sprint(r), Accepted: "please report this with the command line that led to it"})
+			err = &dosing.Problem{Kind: dosing.Failed, Code: "failed",
+				Given: fmt.Sprint(r), Accepted: "please report this with the command line that led to it"}
 		}
 	}()
-	c := &console{in: stdin, out: &bytes.Buffer{}, direct: output{stdout}, terminal: isTerminal(stdin) && isTerminal(stdout)}
+	c = &console{in: stdin, out: &bytes.Buffer{}, direct: output{stdout}, terminal: isTerminal(stdin) && isTerminal(stdout)}
 	if isTerminal(stderr) && !isTerminal(stdout) {
 		c.progress = stderr
 	}
@@ -59,15 +73,10 @@ func run(args []string, stdin io.Reader, stdout, stderr io.Writer) (code int) {
 	root.SetIn(stdin)
 	root.SetErr(io.Discard)
 	if err := root.Execute(); err != nil {
-		return refuse(stderr, asJSON, err)
+		return c, err
 	}
-	if _, err := c.direct.Write(c.out.Bytes()); err != nil {
-		return refuse(stderr, asJSON, err)
-	}
-	for _, note := range c.notes {
-		fmt.Fprintln(stderr, note)
-	}
-	return c.code
+	_, err = c.direct.Write(c.out.Bytes())
+	return c, err
 }
 
 // output tells a failure to write from one to read.
@@ -104,17 +113,23 @@ func wantsJSON(args []string) (wants bool) {
 
 // refuse writes the one line, or the object, and returns the exit code.
 func refuse(stderr io.Writer, asJSON bool, err error) int {
-	p, row := asProblem(err)
+	p, line := refusalLine(err)
 	if asJSON {
 		_, _ = stderr.Write(report.ProblemJSON(p)) // nowhere is left to say that it failed
 		return exitCode(p.Kind)
 	}
+	fmt.Fprintln(stderr, "beckline: "+line)
+	return exitCode(p.Kind)
+}
+
+// refusalLine is an error as a problem and as one line for a person.
+func refusalLine(err error) (*dosing.Problem, string) {
+	p, row := asProblem(err)
 	line := report.ProblemLine(p)
 	if row > 0 {
 		line = fmt.Sprintf("row %d: %s", row, line)
 	}
-	fmt.Fprintln(stderr, "beckline: "+line)
-	return exitCode(p.Kind)
+	return p, line
 }
 
 func exitCode(k dosing.ProblemKind) int {
@@ -150,6 +165,9 @@ func withHint(p *dosing.Problem) *dosing.Problem {
 }
 
 func isTerminal(stream any) bool {
+	if _, ok := stream.(nobody); ok {
+		return true
+	}
 	f, ok := stream.(*os.File)
 	return ok && terminal(f)
 }

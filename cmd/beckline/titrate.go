@@ -11,6 +11,7 @@ import (
 	"beckline/dosing/reading"
 	"beckline/dosing/report"
 	"beckline/dosing/titration"
+	"beckline/tui"
 )
 
 // titrateCommand holds one command a method of the bench. Each writes the
@@ -70,6 +71,8 @@ func (c *console) write(o outcome, asJSON bool) error {
 		fmt.Fprintf(c.out, "%-28s %s\n", f.label, f.shown)
 		if f.flag != "" {
 			flags = append(flags, f.flag)
+			name, text, _ := strings.Cut(strings.TrimPrefix(f.flag, "--"), " ")
+			c.gives = append(c.gives, tui.Given{Name: name, Text: text})
 		}
 	}
 	if o.working != "" {
