@@ -71,6 +71,19 @@ func (p *plantFlags) open() (*site.Line, error) {
 	return nil, badLine("unknown_line", "line", p.line.text, strings.Join(names, ", "))
 }
 
+// usualLine is the line that the plant file in its usual place starts with, nil
+// where there is no such file.
+func usualLine() (*site.Line, error) {
+	s, err := site.Open("")
+	if err != nil {
+		return nil, siteProblem(err)
+	}
+	if s == nil {
+		return nil, nil
+	}
+	return s.Start, nil
+}
+
 // openSite loads a plant file by its name, or the one in its usual place.
 func openSite(file string) (*site.Site, error) {
 	s, err := site.Open(file)

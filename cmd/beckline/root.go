@@ -16,6 +16,7 @@ func terminal(f *os.File) bool { return term.IsTerminal(int(f.Fd())) }
 // rootCommand builds the whole command tree for one run.
 func rootCommand(c *console) *cobra.Command {
 	var screen tui.Options
+	var plant plantFlags
 	var asJSON bool
 	root := &cobra.Command{
 		Use:   "beckline",
@@ -30,12 +31,25 @@ func rootCommand(c *console) *cobra.Command {
 			if asJSON {
 				return c.answer(entry.Demo(), entry.NeedDose, true)
 			}
+			line, err := plant.open()
+			if err != nil {
+				return err
+			}
 			if c.terminal {
+				// The screen, unlike a command line, belongs to its plant: without a
+				// word it starts from the plant file in the usual place, if there is one.
+				if line == nil {
+					if line, err = usualLine(); err != nil {
+						return err
+					}
+				}
+				screen.Line = line
 				return openScreen(c, screen)
 			}
 			return printDemo(c)
 		},
 	}
+	plant.add(root)
 	root.Flags().BoolVar(&screen.ASCII, "ascii", false, "the screen with plain characters only")
 	root.Flags().BoolVar(&screen.Linear, "linear", false, "the screen as lines of text in order, for a screen reader")
 	root.Flags().BoolVar(&asJSON, "json", false, "the demo plant's answer, or a refusal, as JSON")
