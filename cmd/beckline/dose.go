@@ -25,7 +25,8 @@ func doseCommand(c *console) *cobra.Command {
 			"saturation index, CCPP or inorganic carbon, and its feed and pump setting.\n" +
 			"It needs pH (or DIC), alkalinity, temperature, one target and a product; two\n" +
 			"products reach two targets together. With --tank it plans the treatment of a\n" +
-			"tank in stages. A plant file supplies what is not typed, and its limits hold.",
+			"tank in stages. A plant file supplies what is not typed, and its limits hold.\n" +
+			"Lime softening (precipitation as treatment) is out of its scope.",
 		Example: "  beckline dose --ph 7.0 --alkalinity 30 --temperature 10 --calcium 12 \\\n" +
 			"    --flow \"1 MGD\" --target-ph 8.5 --product caustic-50 --pump 15\n" +
 			"  beckline dose --ph 6.8 --alkalinity 20 --temperature 8 --flow 240 \\\n" +

@@ -29,7 +29,7 @@ func titrateCommand(c *console) *cobra.Command {
 		RunE:    func(cmd *cobra.Command, _ []string) error { return cmd.Help() },
 	}
 	cmd.AddCommand(titrateAlkalinityCommand(c), titrateHardnessCommand(c), titrateGranCommand(c),
-		titrateConductivityCommand(c), titrateCarbonCommand(c))
+		titrateConductivityCommand(c), titrateCarbonCommand(c), titrateIonsCommand(c), titrateMeterCommand(c))
 	return cmd
 }
 

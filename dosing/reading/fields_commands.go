@@ -24,6 +24,8 @@ var commandTable = build([]Field{
 	alkalinityPart(),
 	bench("end-ph", "end_ph", "pH at the first end point", phUnits, 14, false),
 	bench("low-end-ph", "low_end_ph", "pH at the second end point", phUnits, 14, false),
+	bench("meter-set", "meter_set_c", "temperature to which the pH meter was set", temperatureUnits, 50, false),
+	bench("sample-temperature", "sample_temperature_c", "temperature of the sample in which it was read", temperatureUnits, 50, false),
 })
 
 // bench is a quantity of the bench: 0, or above it, to high in its bare unit.

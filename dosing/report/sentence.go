@@ -73,6 +73,7 @@ var sentences = map[string]func(w dosing.Warning) string{
 		"the water is outside that"),
 	"co2_above_saturation": says("this pH and alkalinity mean more carbon dioxide than water holds under the pure gas; " +
 		"one of the two readings is wrong"),
+	"ions_disagree": says("the titrated alkalinity and the balance of the ions part by more than the readings allow"),
 	"chloramine_formed": func(w dosing.Warning) string {
 		return about(w) + "the free chlorine combines with the ammonia in the water; what is left of it is monochloramine, not free chlorine"
 	},
