@@ -58,7 +58,20 @@ func answer(s *dosing.Station, u units) setting {
 	case given("feed_kg_d"):
 		return hourly("FEED", "feed_kg_d", "feed_lb_d")
 	}
-	return of("DOSE (no flow given)", "product_mg_l")
+	a := of("DOSE, AS PRODUCT", "product_mg_l")
+	a.others = []string{pureDose(s), "no flow given"}
+	return a
+}
+
+// pureDose is the dose as the chemical's own formula, which it names: beside
+// the dose as product it is another figure of the same feed.
+func pureDose(s *dosing.Station) string {
+	x := figure(report.Dose(s), "dose_mg_l")
+	text := x.ShowUnit() + " as " + s.Addition.Product.Chemical.Formula
+	if len([]rune(text)) > answerWidth {
+		text = x.ShowUnit() + " pure"
+	}
+	return text
 }
 
 // drawAnswer shows the answer, or why there is none, at the right of the line.
@@ -207,11 +220,12 @@ func refusalHeading(p *dosing.Problem) string {
 // drawRefusal says that no dose does it. The message rows say it in full.
 func (m *Model) drawRefusal(c *canvas.Canvas, x, top int) {
 	p := m.good.refusal
-	heading := refusalHeading(p)
+	rows := lineRows - 1
 	if m.old {
-		heading = "OLD: " + heading
+		c.Text(x, top, "OF THE ENTRIES BEFORE", canvas.Notice)
+		top, rows = top+1, rows-1
 	}
-	c.Text(x, top, heading, canvas.Alarm)
+	c.Text(x, top, refusalHeading(p), canvas.Alarm)
 	text := ""
 	if p.Nearest.Given {
 		text = "nearest is " + targetText(dosing.Target{Kind: p.Target.Kind, Value: p.Nearest.Value})
@@ -223,7 +237,7 @@ func (m *Model) drawRefusal(c *canvas.Canvas, x, top int) {
 		text = "see below"
 	}
 	for i, line := range canvas.Wrap(text, answerWidth) {
-		if i < lineRows-1 {
+		if i < rows {
 			c.Text(x, top+1+i, line, canvas.Plain)
 		}
 	}

@@ -114,7 +114,9 @@ func (m *Model) chooseProduct() {
 		if s.text(p) != name {
 			s.choose(p, name)
 		}
-		s.Untouched = false
+		if p.add < 0 {
+			s.UntouchedProduct = false
+		}
 		m.change(s)
 	}}, m.sheet.text(p))
 }

@@ -1,7 +1,7 @@
 package tui
 
 import (
-	"fmt"
+	"slices"
 	"time"
 
 	"beckline/tui/draft"
@@ -25,20 +25,40 @@ func (s *session) openDrafts(m *Model) {
 		if saved.Load(&sh) != nil || sh.readings() == 0 {
 			continue
 		}
+		sh = sh.whole()
+		sh.plant = s.options.Line
+		if slices.ContainsFunc(s.offers, func(o offer) bool { return o.sheet.equal(sh) }) {
+			saved.Remove() // a newer draft holds the very same
+			continue
+		}
 		s.offers = append(s.offers, offer{
-			said: fmt.Sprintf("%s, %d readings", when(saved.When.Local(), time.Now()), sh.readings()),
-			load: func() (sheet, error) {
-				sh = sh.whole()
-				sh.plant = s.options.Line
-				return sh, nil
-			},
-			done: func() {
-				saved.Remove()
-				s.offers = s.offers[1:]
-			},
+			said:  when(saved.When.Local(), time.Now()) + ", " + plural(sh.readings(), "reading"),
+			sheet: sh,
+			done:  saved.Remove,
 		})
 	}
+	s.offers = fullestFirst(s.offers)
 	m.hooks.drafts = func() []offer { return s.offers }
+}
+
+// enough is how many readings a dose needs: pH or DIC, alkalinity, temperature.
+const enough = 3
+
+// fullestFirst puts the drafts with enough for a dose first, then the fuller
+// ones; among equals the newest stays first. A stray digit of a later session
+// then hides nothing.
+func fullestFirst(offers []offer) []offer {
+	full := func(o offer) int { return min(o.sheet.readings(), enough) }
+	slices.SortStableFunc(offers, func(a, b offer) int { return full(b) - full(a) })
+	return offers
+}
+
+// dropTaken removes the draft that was taken up, once the session has been left
+// and its own draft holds as much.
+func (s *session) dropTaken(m *Model) {
+	if o := m.taken; o != nil && !m.sheet.Demo && m.sheet.readings() >= o.sheet.readings() && !s.store.Failing() {
+		o.done()
+	}
 }
 
 // when says a time as a person would, with the day where it is not today.

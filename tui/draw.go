@@ -80,8 +80,8 @@ func (m *Model) drawTitle(c *canvas.Canvas) {
 		name = m.sheet.plantName()
 	}
 	c.Text(1, 0, canvas.Cut(name, c.Width-2), canvas.Plain)
-	if m.sheet.Untouched {
-		c.Right(c.Width-1, 0, "product and target are the starting ones: check them (p, t)", canvas.Notice)
+	if text := m.sheet.unchecked(); text != "" {
+		c.Right(c.Width-1, 0, text, canvas.Notice)
 	}
 }
 

@@ -27,6 +27,7 @@ type evaluation struct {
 	curve   curve
 	trust   trust
 	alarms  []alarm
+	line    []lineStep // whose waters the result holds, in its order
 }
 
 // inspect looks at each place by itself: what cannot be used there, and what is
@@ -44,6 +45,7 @@ func inspect(s sheet) evaluation {
 // evaluate computes everything that the screen shows of a sheet.
 func evaluate(s sheet, solve Solver) evaluation {
 	e := inspect(s)
+	e.line = s.steps()
 	for i, a := range s.Adds {
 		if a.missing() {
 			e.missing = append(e.missing, "dose-"+strconv.Itoa(i+1))
@@ -172,15 +174,22 @@ func (e *evaluation) answer(s sheet, solve Solver) {
 	e.alarms = limitsPassed(s, r)
 }
 
-// waterOnly solves the raw water without any addition.
+// waterOnly works out the water up to the dose that is asked for: the raw water
+// and what is fed ahead. Where that cannot be had, the raw water alone.
 func (e *evaluation) waterOnly(s sheet, solve Solver) {
 	c, err := s.caseFor(entry.NeedWater)
 	if err != nil {
 		e.refuse(err)
 		return
 	}
-	c.Additions, c.Target = nil, dosing.Target{}
-	if r, err := solve(c); err == nil {
+	c.Target = dosing.Target{}
+	c.Additions = c.Additions[:min(s.ahead(), len(c.Additions))]
+	r, err := solve(c)
+	if err != nil && len(c.Additions) > 0 {
+		c.Additions = nil
+		r, err = solve(c)
+	}
+	if err == nil {
 		e.result = r
 	} else if e.refusal == nil {
 		e.refuse(err)

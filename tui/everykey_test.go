@@ -34,8 +34,8 @@ var walkAll = []step{
 	{walking, "tab", "▸alkalinity"}, {walking, "shift+tab", "▸pH "}, {walking, "end", "▸TDS"}, {walking, "home", "▸pH "},
 	{walking, "pgdown", "▸calcium"}, {walking, "pgup", "▸pH "},
 	{walking, "+", "7.05"}, {walking, "-", "7.00"}, {walking, "=", "7.05"}, {walking, "−", "7.00"},
-	{walking, "down down down backspace", "DOSE (no flow given)"}, {walking, "u", "SET THE PUMP TO"},
-	{walking, "delete", "DOSE (no flow given)"}, {walking, "u", "SET THE PUMP TO"},
+	{walking, "down down down backspace", "DOSE, AS PRODUCT"}, {walking, "u", "SET THE PUMP TO"},
+	{walking, "delete", "DOSE, AS PRODUCT"}, {walking, "u", "SET THE PUMP TO"},
 	{walking, "g", ""}, {walking, "g", "twitchy"}, {walking, "m", "units US"}, {walking, "m", "units mixed"}, {walking, "m", "units SI"},
 	{walking, "y", ">\x1b]52;c;"}, {walking, "ctrl+l", ">\x1b[2J"},
 

@@ -17,7 +17,7 @@ var lineFigures = []struct{ key, label string }{
 }
 
 const (
-	lineLabels  = 15 // columns of the labels
+	lineLabels  = 16 // columns of the labels
 	leastColumn = 11 // columns of a station at least
 	mostColumn  = 18
 	answerWidth = 23
@@ -30,7 +30,7 @@ func (m *Model) drawLine(c *canvas.Canvas, top int) {
 	column := min(max(room/len(m.line), leastColumn), mostColumn)
 	shown := min(room/column, len(m.line))
 	first := min(max(m.at-shown/2, 0), len(m.line)-shown)
-	c.Text(1, top+1, "dose, mg/L", canvas.Faint)
+	c.Text(1, top+1, "dose mg/L pure", canvas.Faint)
 	for i, f := range lineFigures {
 		c.Text(1, top+2+i, f.label, canvas.Faint)
 	}
@@ -100,13 +100,20 @@ func (m *Model) isFinishedWater(n int) bool { return n > 0 && n == len(m.line)-2
 // where there is none.
 func (m *Model) water(st station) *dosing.Station {
 	r := m.good.result
-	if r == nil || st.index >= len(r.Stations) {
+	if r == nil {
 		return nil
 	}
-	if st.index > 0 && !m.good.solved {
+	index := st.index
+	switch {
+	case m.old && st.kind == finishedStation:
+		index = len(m.good.line) - 1
+	case m.old:
+		index = oldIndex(m.good.line, m.sheet.steps(), st.index)
+	}
+	if index < 0 || index >= len(r.Stations) {
 		return nil
 	}
-	return &r.Stations[st.index]
+	return &r.Stations[index]
 }
 
 // figure finds a figure by its key.

@@ -62,6 +62,7 @@ func lookOf(env func(string) string) look {
 func (l look) limit(c *canvas.Canvas) {
 	switch l.glyphs {
 	case asciiGlyphs:
+		c.Close('°') // a degree sign that becomes a blank leaves two of them
 		c.Map(canvas.ASCII)
 	case consoleGlyphs:
 		c.Map(canvas.Console)

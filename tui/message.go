@@ -98,7 +98,11 @@ func (m *Model) sayTrouble(say func(canvas.Style, string)) {
 		say(canvas.Notice, "STILL NEEDED: "+strings.Join(names, ", "))
 	}
 	if o, ok := m.waitingDraft(); ok {
-		say(canvas.Plain, "d takes up the draft of "+o.said)
+		text := "d takes up the draft of " + o.said
+		if n := len(m.offered()); n > 1 {
+			text += "; d again the next of " + strconv.Itoa(n)
+		}
+		say(canvas.Plain, text)
 	}
 }
 
@@ -156,7 +160,11 @@ func (m *Model) pasteQuestion() string {
 		}
 		parts = append(parts, text)
 	}
-	return "Pasted: " + strings.Join(parts, ", ") + ". Enter enters them, Esc drops them."
+	pasted := "Pasted: "
+	if m.pasteMore {
+		pasted = "Pasted, the first row only: "
+	}
+	return pasted + strings.Join(parts, ", ") + ". Enter enters them, Esc drops them."
 }
 
 // showWarnings opens a page with all alarms and warnings, and the trust.

@@ -68,6 +68,10 @@ type Model struct {
 	work  work
 	paste []pasted
 
+	pasteMore bool // the paste held more rows than the first, which is asked about
+
+	taken *offer // the draft that was taken up last; nil without
+
 	profile bool // the second view: figures along the line in place of the curve
 
 	note string // one message, until the next key
@@ -121,7 +125,7 @@ func (m *Model) Update(msg tea.Msg) (tea.Model, tea.Cmd) {
 // anybody else to show.
 func (m *Model) View() string {
 	if m.look.linear && m.hooks.lines != nil {
-		m.hooks.lines(m.speak())
+		m.hooks.lines(m.speak().Wrapped(max(m.width-1, leastLinear)))
 		return ""
 	}
 	c := m.draw()

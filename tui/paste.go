@@ -31,6 +31,11 @@ func (m *Model) pasteText(text string) {
 	if m.state != walking && m.state != typing {
 		return
 	}
+	if named, again, ok := namedPaste(text); ok {
+		m.ask(named, again)
+		return
+	}
+	text, more := firstRow(text)
 	values := splitPaste(text)
 	switch {
 	case len(values) == 0:
@@ -38,7 +43,7 @@ func (m *Model) pasteText(text string) {
 	case len(values) == 1:
 		m.pasteOne(values[0])
 	default:
-		m.pasteRow(values)
+		m.pasteRow(values, more)
 	}
 }
 
@@ -55,21 +60,41 @@ func (m *Model) pasteOne(text string) {
 	}
 }
 
-func (m *Model) pasteRow(values []string) {
+// pasteRow offers values in the order of the readings. One whose unit its place
+// does not take goes where its unit belongs.
+func (m *Model) pasteRow(values []string, more bool) {
 	if len(values) > len(rawPlaces) {
 		m.note = "the paste holds more values than there are readings"
 		return
 	}
-	if m.state == typing {
-		m.cancel()
-	}
-	m.paste = nil
+	var row []namedValue
+	seen := map[string]bool{}
 	for i, text := range values {
 		if text == "" {
 			continue
 		}
-		text = m.sheet.Units.complete(rawPlaces[i], text)
-		p := pasted{place: rawPlaces[i], text: reading.Clean(text)}
+		p := rawPlaces[i]
+		if _, err := p.field.Parse(text); err != nil {
+			if other, sure := placeByUnit(text); sure {
+				p = other
+			}
+		}
+		if !seen[p.name] {
+			row, seen[p.name] = append(row, namedValue{place: p, text: text}), true
+		}
+	}
+	m.ask(row, more)
+}
+
+// ask shows what would be entered and waits for a yes.
+func (m *Model) ask(values []namedValue, more bool) {
+	if m.state == typing {
+		m.cancel()
+	}
+	m.paste, m.pasteMore = nil, more
+	for _, value := range values {
+		text := m.sheet.Units.complete(value.place, value.text)
+		p := pasted{place: value.place, text: reading.Clean(text)}
 		if v, err := p.place.field.Parse(text); err != nil {
 			p.wrong = err.Error()
 		} else if v.Unusual {

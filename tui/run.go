@@ -128,7 +128,10 @@ func (s *session) run() (code int) {
 	err := s.loop()
 	s.restore()
 	s.store.Close()
-	return s.exit(err)
+	if code = s.exit(err); code == 0 {
+		s.dropTaken(m)
+	}
+	return code
 }
 
 // loop runs the program; a fault in its own loop is noted like one of ours.

@@ -22,9 +22,10 @@ type sheet struct {
 	Limits   map[string]string `json:"limits,omitempty"` // of the plant, by the names in limits.go, as typed
 	// Demo says that the readings are those of the demo plant.
 	Demo bool `json:"demo,omitempty"`
-	// Untouched says that target and product are the ones the screen started
-	// with: nobody has chosen them yet.
-	Untouched bool `json:"untouched,omitempty"`
+	// Untouched says that the target is the one the screen started with, and
+	// UntouchedProduct the same of the product: nobody has chosen it yet.
+	Untouched        bool `json:"untouched,omitempty"`
+	UntouchedProduct bool `json:"untouched_product,omitempty"`
 
 	plant *site.Line // the line of a plant file that the screen was opened with; nil without
 }
@@ -35,7 +36,7 @@ var targets = []string{"target-ph", "target-alkalinity", "target-si", "target-cc
 // newSheet makes a sheet of a form. demo says that its readings are invented.
 func newSheet(f entry.Form, demo bool) sheet {
 	s := sheet{Values: map[string]string{}, Product: f.Product, Target: targets[0], Accepted: map[string]string{},
-		Limits: map[string]string{}, Demo: demo, Untouched: demo}
+		Limits: map[string]string{}, Demo: demo, Untouched: demo, UntouchedProduct: demo}
 	for name, text := range f.Values {
 		if text != "" {
 			s.Values[name] = text
@@ -87,7 +88,7 @@ func (s sheet) clone() sheet {
 func (s sheet) equal(t sheet) bool {
 	return maps.Equal(s.Values, t.Values) && s.Product == t.Product && s.Target == t.Target &&
 		slices.Equal(s.Adds, t.Adds) && s.Units == t.Units && maps.Equal(s.Accepted, t.Accepted) &&
-		maps.Equal(s.Limits, t.Limits) && s.Demo == t.Demo && s.Untouched == t.Untouched
+		maps.Equal(s.Limits, t.Limits) && s.Demo == t.Demo && s.Untouched == t.Untouched && s.UntouchedProduct == t.UntouchedProduct
 }
 
 // own is the sheet with which a plant's own readings start: every number of
@@ -96,7 +97,7 @@ func (s sheet) equal(t sheet) bool {
 // them until somebody does.
 func (s sheet) own() sheet {
 	n := sheet{Values: map[string]string{}, Product: s.Product, Target: s.Target, Accepted: map[string]string{},
-		Limits: maps.Clone(s.Limits), Units: s.Units, Untouched: s.Untouched, plant: s.plant}
+		Limits: maps.Clone(s.Limits), Units: s.Units, Untouched: s.Untouched, UntouchedProduct: s.UntouchedProduct, plant: s.plant}
 	if text := s.Values[s.Target]; text != "" {
 		n.Values[s.Target] = text
 	}
@@ -141,4 +142,17 @@ func (s sheet) readings() int {
 		}
 	}
 	return n
+}
+
+// unchecked says what is still as the screen started, "" where nothing is.
+func (s sheet) unchecked() string {
+	switch {
+	case s.Untouched && s.UntouchedProduct:
+		return "product and target are the starting ones: check them (p, t)"
+	case s.Untouched:
+		return "the target is the starting one: check it (t)"
+	case s.UntouchedProduct:
+		return "the product is the starting one: check it (p)"
+	}
+	return ""
 }

@@ -45,11 +45,11 @@ func TestTakingUpADraft(t *testing.T) {
 	taken := false
 	saved := demo(t).own().m.sheet
 	d.m.hooks.drafts = func() []offer {
-		return []offer{{said: "08:40 today, 4 readings", load: func() (sheet, error) { return saved, nil }, done: func() { taken = true }}}
+		return []offer{{said: "08:40 today, 4 readings", sheet: saved, done: func() { taken = true }}}
 	}
 	d.shows("DEMO PLANT", "d takes up the draft of 08:40 today, 4 readings")
 	d.keys("d").hides("DEMO PLANT", "d takes up").shows("7.0", "taken up")
-	if !taken || d.m.sheet.Values["flow"] != "240" || !d.m.good.solved {
+	if taken || d.m.sheet.Values["flow"] != "240" || !d.m.good.solved {
 		t.Errorf("taken %v, sheet %+v", taken, d.m.sheet)
 	}
 	d.keys("u").shows("DEMO PLANT")

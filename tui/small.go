@@ -5,7 +5,6 @@ import (
 	"slices"
 
 	"beckline/dosing/caution"
-	"beckline/dosing/report"
 	"beckline/tui/canvas"
 )
 
@@ -28,8 +27,7 @@ func (m *Model) drawSmall(c *canvas.Canvas) {
 			text = "OLD: " + text
 		}
 		put(text, canvas.Answer)
-		f := report.Dose(m.good.result.Dose())
-		put("dose "+figure(f, "dose_mg_l").ShowUnit()+" "+m.sheet.Product, canvas.Plain)
+		put("dose "+pureDose(m.good.result.Dose())+", "+m.sheet.Product, canvas.Plain)
 	} else {
 		put("no dose yet", canvas.Plain)
 	}

@@ -11,6 +11,10 @@ import (
 	"beckline/tui/painter"
 )
 
+// leastLinear is how many columns lines of text have at least: on fewer the
+// terminal breaks them.
+const leastLinear = 20
+
 // speak is the screen as sentences in order: for a screen reader, and for a
 // terminal whose cursor cannot be moved. It says what draw shows.
 func (m *Model) speak() painter.Lines {
@@ -50,7 +54,7 @@ func (m *Model) plain(text string) string {
 	if m.look.glyphs == fullGlyphs {
 		return text
 	}
-	return strings.Map(canvas.ASCII, text)
+	return strings.Map(canvas.ASCII, strings.ReplaceAll(text, " °", " "))
 }
 
 // sayPlace is the prompt: where the keys go.
@@ -81,14 +85,14 @@ func (m *Model) sayLine() []string {
 	} else {
 		out = append(out, m.sayAnswer())
 	}
-	if m.sheet.Untouched && !m.sheet.Demo {
-		out = append(out, "Product and target are the starting ones: check them with p and t.")
+	if text := m.sheet.unchecked(); text != "" && !m.sheet.Demo {
+		out = append(out, sentence(text))
 	}
 	for n, st := range m.line {
 		if s := m.water(st); s != nil {
 			var parts []string
 			if s.Addition != nil && s.Addition.Process == dosing.ChemicalFeed && st.kind != finishedStation {
-				parts = append(parts, "dose "+figure(report.Dose(s), "dose_mg_l").ShowUnit())
+				parts = append(parts, "dose "+pureDose(s))
 			}
 			figures := report.Water(&s.Figures)
 			for _, f := range lineFigures {
@@ -128,6 +132,8 @@ func (m *Model) sayAnswer() string {
 			return "No answer."
 		}
 		return "Still needed: " + strings.Join(names, ", ") + "."
+	case m.good.refusal != nil && m.old:
+		return "Of the entries before there was no dose: " + strings.ToLower(refusalHeading(m.good.refusal)) + "."
 	case m.good.refusal != nil:
 		return "No dose: " + strings.ToLower(refusalHeading(m.good.refusal)) + "."
 	}

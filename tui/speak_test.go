@@ -28,6 +28,8 @@ func TestSpokenScreen(t *testing.T) {
 	has("Set the pump to 5.07 L/h", "that is 84.6 mL/min", "raw water, pH read at: not entered")
 	d.keys("Home", "1,200", "Enter")
 	has("Old figures, do not set", "can be read in two ways")
+	d.keys("u", "Home", "Down", "Down", "Down", "BS")
+	has("Dose, as product 26.9 mg/L", "that is 6.73 mg/L as NaOH, no flow given", "caustic-25: dose 6.73 mg/L as NaOH")
 	d.keys("u", "p", "soda")
 	has("products, search: soda", "1 of 4: soda-ash")
 	d.keys("Esc", "?")

@@ -15,6 +15,9 @@ func (m *Model) typeRune(r rune) {
 	if p := m.place(); m.sheet.Demo && isReading(p.name) {
 		m.use(m.sheet.own())
 	}
+	if m.asked && strings.ContainsRune("0123456789.,-−", r) {
+		m.edit.clear() // the answer to the question is another value
+	}
 	m.edit.insert(r)
 	m.asked, m.paused = false, false
 }

@@ -200,7 +200,7 @@ func TestErasingIsNotMeasured(t *testing.T) {
 	if _, there := d.m.sheet.Values["flow"]; there {
 		t.Error("the flow is still there")
 	}
-	d.shows("DOSE (no flow given)")
+	d.shows("DOSE, AS PRODUCT", "no flow given", "mg/L as NaOH")
 	d.keys("Up", "BS").shows("OLD FIGURES", "STILL NEEDED: temperature")
 }
 

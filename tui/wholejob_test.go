@@ -122,7 +122,7 @@ func TestWholeJobByKeys(t *testing.T) {
 		p.keys("psulfuric-93\r") // the wrong way, until the target is lower
 		p.wait("WRONG WAY")
 		p.keys("\x1b[C\x1b[C\x1b[A\x1b[B66\r") // 66 for 6.6
-		p.wait("OLD", "accepted")
+		p.wait("ENTRIES BEFORE", "accepted")
 		p.keys("\x1b[A6.6\r")
 		p.wait(fed(t, form("sulfuric-93", "6.6")), "for pH 6.60")
 		p.keys("u")

@@ -36,3 +36,23 @@ func Console(r rune) rune {
 	}
 	return r
 }
+
+// Close takes r out where a blank stands before it, and moves what follows up
+// to the next blank to the left: what becomes a blank then leaves only one.
+func (c *Canvas) Close(r rune) {
+	for y := range c.Height {
+		row := c.Row(y)
+		for x := 0; x < len(row); x++ {
+			if row[x].Rune != r || x == 0 || row[x-1].Rune != ' ' {
+				continue
+			}
+			for x+1 < len(row) && row[x].Rune != ' ' {
+				row[x] = row[x+1]
+				x++
+			}
+			if row[x].Rune != ' ' { // the row ended before a blank came
+				row[x] = Blank
+			}
+		}
+	}
+}

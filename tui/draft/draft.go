@@ -19,8 +19,10 @@ import (
 
 const (
 	suffix = ".draft.json"
-	// keepNewest is how many drafts of ended sessions are kept.
+	// keepNewest drafts of ended sessions are kept however old they are.
 	keepNewest = 10
+	// keepAge is how long every draft is kept.
+	keepAge = 7 * 24 * time.Hour
 )
 
 // Store keeps the draft of one session. All methods may be called on a nil
@@ -208,7 +210,7 @@ func (s *Store) Close() {
 }
 
 // Offers lists the drafts of ended sessions, newest first, and removes those
-// that are too many.
+// that are too many and too old.
 func (s *Store) Offers() []Saved {
 	if s == nil {
 		return nil
@@ -230,7 +232,7 @@ func (s *Store) Offers() []Saved {
 		out = append(out, Saved{When: r.When, Path: path})
 	}
 	sort.Slice(out, func(i, j int) bool { return out[i].When.After(out[j].When) })
-	for len(out) > keepNewest {
+	for len(out) > keepNewest && time.Since(out[len(out)-1].When) > keepAge {
 		out[len(out)-1].Remove()
 		out = out[:len(out)-1]
 	}

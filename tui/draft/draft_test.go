@@ -121,3 +121,23 @@ func TestDir(t *testing.T) {
 		}
 	}
 }
+
+// TestYoungDraftsAreNotCrowdedOut: many short sessions push no draft of this
+// week out; of older ones the newest ten stay.
+func TestYoungDraftsAreNotCrowdedOut(t *testing.T) {
+	dir := t.TempDir()
+	s := open(t, dir)
+	defer s.Close()
+	for age, count := range map[time.Duration]int{time.Hour: 12, 8 * 24 * time.Hour: 3} {
+		for n := range count {
+			when := time.Now().Add(-age).UTC().Format(time.RFC3339)
+			path := filepath.Join(dir, time.Now().Add(-age).Format("20060102")+string(rune('a'+n))+suffix)
+			if err := os.WriteFile(path, []byte(`{"version":1,"when":"`+when+`","content":{}}`), 0o600); err != nil {
+				t.Fatal(err)
+			}
+		}
+	}
+	if n := len(s.Offers()); n != 12 {
+		t.Errorf("%d drafts kept, want the 12 of today", n)
+	}
+}

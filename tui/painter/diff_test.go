@@ -134,3 +134,10 @@ func TestPlainTerminal(t *testing.T) {
 		t.Errorf("first cell %q", got)
 	}
 }
+
+func TestSentencesBreakBetweenWords(t *testing.T) {
+	l := Lines{Statements: []string{"one two three", "four"}, Prompt: "p"}.Wrapped(8)
+	if len(l.Statements) != 2 || l.Statements[0] != "one two\r\nthree" || l.Statements[1] != "four" || l.Prompt != "p" {
+		t.Errorf("wrapped to %q", l)
+	}
+}

@@ -1,6 +1,10 @@
 package painter
 
-import "strings"
+import (
+	"strings"
+
+	"beckline/tui/canvas"
+)
 
 // Lines is a frame for a terminal without cursor addressing, or for a person
 // whom a screen reader reads to: sentences in order, then a prompt with what is
@@ -60,4 +64,15 @@ func (l *linear) ask(prompt string) string {
 		return strings.Repeat("\b \b", len([]rune(old[len(prompt):])))
 	}
 	return "\r\n" + prompt
+}
+
+// Wrapped is the same with the sentences broken between words, so that the
+// terminal breaks none in the middle of one. A sentence stays one sentence.
+func (l Lines) Wrapped(width int) Lines {
+	whole := l.Statements
+	l.Statements = make([]string, len(whole))
+	for i, s := range whole {
+		l.Statements[i] = strings.Join(canvas.Wrap(s, width), "\r\n")
+	}
+	return l
 }
