@@ -8,12 +8,6 @@ func (s *State) BufferIntensity() float64 {
 	return math.Ln10 * (s.p.slopes(carbonGiven).protons + s.p.minorSlope)
 }
 
-// WaterBufferIntensity is the part of BufferIntensity that water itself (H and
-// OH) brings, eq/L per pH unit.
-func (s *State) WaterBufferIntensity() float64 {
-	return math.Ln10 * (s.p.hyd + s.p.oh)
-}
-
 // CarbonateBufferShare is the share of BufferIntensity that inorganic carbon
 // brings, 0 to 1: what is lost when the carbon is taken out at the same pH,
 // with the other ions as they are.

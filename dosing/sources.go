@@ -1,6 +1,7 @@
 package dosing
 
 import (
+	"math"
 	"strings"
 
 	"beckline/carbonate"
@@ -135,7 +136,7 @@ func ShareToMeet(c Case) (float64, error) {
 			}
 			return (lo + hi) / 2, nil
 		}
-		if bestShare < 0 || abs(d) < abs(best-target.Value) {
+		if bestShare < 0 || math.Abs(d) < math.Abs(best-target.Value) {
 			best, bestShare = f, share
 		}
 		last = d
@@ -158,11 +159,4 @@ func figureOf(f *Figures, kind TargetKind) (float64, bool) {
 		return f.DIC, true
 	}
 	return 0, false
-}
-
-func abs(x float64) float64 {
-	if x < 0 {
-		return -x
-	}
-	return x
 }

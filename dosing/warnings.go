@@ -50,8 +50,8 @@ func (r *run) warnWater(st *Station, where string) {
 	}
 	// More carbon dioxide than water holds under the pure gas cannot be in an open
 	// sample: pH and alkalinity contradict each other.
-	if k, err := carbonate.ConstantsAt(f.Water.Kelvin); err == nil && f.FreeCO2 > k.Henry {
-		r.add(Warning{Code: "co2_above_saturation", Field: where, Value: f.FreeCO2, Limit: k.Henry})
+	if f.FreeCO2 > r.k.Henry {
+		r.add(Warning{Code: "co2_above_saturation", Field: where, Value: f.FreeCO2, Limit: r.k.Henry})
 	}
 	if f.Water.Totals[carbonate.Chlorine] > 0 && (f.Water.Kelvin < hoclLow || f.Water.Kelvin > hoclHigh) {
 		r.add(Warning{Code: "chlorine_constant_extrapolated", Field: where, Value: f.Water.Kelvin})

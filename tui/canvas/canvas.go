@@ -98,15 +98,6 @@ func (c *Canvas) Cursor(x, y int) {
 	c.CursorShown = true
 }
 
-// Restyle gives the cells x..x+width-1 of row y another role.
-func (c *Canvas) Restyle(x, y, width int, s Style) {
-	for i := x; i < x+width; i++ {
-		if i >= 0 && y >= 0 && i < c.Width && y < c.Height {
-			c.Cells[y*c.Width+i].Style = s
-		}
-	}
-}
-
 // Lines returns the rows as text without roles, trailing blanks cut.
 func (c *Canvas) Lines() []string {
 	lines := make([]string, c.Height)
